@@ -1,0 +1,5 @@
+/** Package check. */
+@NullMarked
+package blochbound.check;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,5 @@
+/** Package interval. */
+@NullMarked
+package blochbound.interval;
+
+import org.jspecify.annotations.NullMarked;

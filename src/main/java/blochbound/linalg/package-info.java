@@ -1,0 +1,5 @@
+/** Package linalg. */
+@NullMarked
+package blochbound.linalg;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,5 @@
+/** Package measure. */
+@NullMarked
+package blochbound.measure;
+
+import org.jspecify.annotations.NullMarked;

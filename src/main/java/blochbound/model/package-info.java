@@ -1,0 +1,5 @@
+/** Package model. */
+@NullMarked
+package blochbound.model;
+
+import org.jspecify.annotations.NullMarked;
