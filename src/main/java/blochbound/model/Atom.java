@@ -16,6 +16,9 @@ public sealed interface Atom extends Comparable<Atom> {
   /** Tells whether the value depends on parameter {@code index}. */
   boolean dependsOn(int index);
 
+  /** Derivative with respect to parameter {@code index} at the parameters {@code p}. */
+  double derivative(double[] p, int index);
+
   @Override
   default int compareTo(Atom other) {
     return key().compareTo(other.key());
@@ -46,6 +49,11 @@ public sealed interface Atom extends Comparable<Atom> {
     public boolean dependsOn(int parameter) {
       return parameter == index;
     }
+
+    @Override
+    public double derivative(double[] p, int parameter) {
+      return parameter == index ? 1 : 0;
+    }
   }
 
   /** The functions that may stand in a coefficient. */
@@ -69,6 +77,17 @@ public sealed interface Atom extends Comparable<Atom> {
         case SIN -> Math.sin(x);
         case COS -> Math.cos(x);
         case RECIPROCAL -> 1 / x;
+      };
+    }
+
+    /** Derivative at {@code x}. */
+    public double derivative(double x) {
+      return switch (this) {
+        case SQRT -> 0.5 / Math.sqrt(x);
+        case EXP -> Math.exp(x);
+        case SIN -> Math.cos(x);
+        case COS -> -Math.sin(x);
+        case RECIPROCAL -> -1 / (x * x);
       };
     }
 
@@ -109,6 +128,12 @@ public sealed interface Atom extends Comparable<Atom> {
     @Override
     public boolean dependsOn(int index) {
       return argument.dependsOn(index);
+    }
+
+    @Override
+    public double derivative(double[] p, int index) {
+      double inner = argument.derivative(p, index);
+      return inner == 0 ? 0 : function.derivative(argument.value(p)) * inner;
     }
   }
 }

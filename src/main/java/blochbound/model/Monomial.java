@@ -98,6 +98,20 @@ public final class Monomial implements Comparable<Monomial> {
     return product;
   }
 
+  /** Derivative with respect to parameter {@code index} at the parameters {@code p}, rounded. */
+  public double derivative(double[] p, int index) {
+    double sum = 0;
+    for (Map.Entry<Atom, Integer> e : powers.entrySet()) {
+      double inner = e.getKey().derivative(p, index);
+      if (inner != 0) {
+        double base = e.getKey().value(p);
+        int exponent = e.getValue();
+        sum += without(e.getKey()).value(p) * exponent * Math.pow(base, exponent - 1) * inner;
+      }
+    }
+    return sum;
+  }
+
   /** Enclosure of the values over parameter ranges. */
   public Interval enclosure(Interval[] p) {
     Interval product = Interval.ONE;

@@ -200,6 +200,15 @@ public final class Scalar {
     return sum;
   }
 
+  /** Derivative with respect to parameter {@code index} at the parameters {@code p}, rounded. */
+  public double derivative(double[] p, int index) {
+    double sum = 0;
+    for (Map.Entry<Monomial, Coefficient> e : terms.entrySet()) {
+      sum += e.getValue().value() * e.getKey().derivative(p, index);
+    }
+    return sum;
+  }
+
   /** Enclosure of the values over parameter ranges. */
   public Interval enclosure(Interval[] p) {
     Interval sum = Interval.ZERO;
