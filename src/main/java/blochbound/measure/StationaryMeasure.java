@@ -86,6 +86,18 @@ public final class StationaryMeasure {
     return whole;
   }
 
+  /** Bloch coordinates of a matrix on the measure's sites in their own basis. */
+  public double[] reducedCoordinates(Hermitian matrix) {
+    return reducedBasis.coordinates(matrix);
+  }
+
+  /** Bloch coordinates on the whole device of the k-th basis matrix of the measure's sites. */
+  public double[] liftedBasis(int k) {
+    double[] whole = new double[generator.basis().size()];
+    whole[embedding[k]] = tracedRoot;
+    return whole;
+  }
+
   private void fillGradient(double[] p, Hermitian state, double[] gradient) {
     double[] byCoefficient = solver.sensitivities(lifted(located.measure().gradient(state)));
     ParameterSpace space = generator.space();
