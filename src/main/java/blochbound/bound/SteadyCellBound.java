@@ -55,8 +55,7 @@ public final class SteadyCellBound implements CellBound {
     ball = new BallConstraint(generator.space().norm());
     attained = new StationaryMeasure(generator, located, sense);
     kernel = new DualKernel(generator);
-    int degree = RegionExpansion.degree(generator);
-    table = MultiIndexTable.of(generator.space().coordinates(), order + Math.max(1, degree));
+    table = MultiIndexTable.of(generator.space().coordinates(), order + generator.degree());
     affine = new AffineRegionBound(kernel, table, order, ball);
     centreState = new double[generator.basis().size()];
     Interval range = located.measure().range();
@@ -66,11 +65,10 @@ public final class SteadyCellBound implements CellBound {
   /** An order K that suits the size: higher orders pay when the factorisation is the main cost. */
   public static int suitableOrder(BlochGenerator generator) {
     int m = generator.space().coordinates();
-    int degree = Math.max(1, RegionExpansion.degree(generator));
     double work = 4e5 * Math.max(1, generator.basis().size() / 256.0);
     int order = 1;
     while (order < 4
-        && MultiIndexTable.count(m, order + 1 + degree)
+        && MultiIndexTable.count(m, order + 1 + generator.degree())
                 * (generator.terms().size() + 4.0)
                 * generator.basis().size()
             < work) {

@@ -131,6 +131,9 @@ public final class MultiIndexTable {
 
   /** Position of a + b; the sum must be in the table. */
   public int sum(int a, int b) {
+    if (b <= variables) {
+      return b == 0 ? a : plus[a][b - 1];
+    }
     int index = a;
     for (int variable : factors[b]) {
       index = plus[index][variable];
