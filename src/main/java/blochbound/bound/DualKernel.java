@@ -5,6 +5,7 @@ import blochbound.generator.BlochGenerator;
 import blochbound.generator.GeneratorTerm;
 import blochbound.generator.MultiIndexTable;
 import blochbound.generator.RegionExpansion;
+import blochbound.generator.SteadyStateSolver;
 import blochbound.generator.TaylorModel;
 import blochbound.interval.Rounding;
 import blochbound.linalg.LuDecomposition;
@@ -76,7 +77,7 @@ final class DualKernel {
     }
     shift = 0;
     lu.factor();
-    if (lu.pivotRatio() < 1e-13) {
+    if (lu.smallestRelativePivot() < SteadyStateSolver.SINGULAR_PIVOT) {
       prepareShifted(centre);
     }
     inverse = size - 1 <= LARGEST_INVERSE ? lu.inverse() : new double[0][];

@@ -42,9 +42,17 @@ public final class StationaryMeasure {
     return value(z, new double[0]);
   }
 
+  /** Value at parameters in internal units. */
+  public double valueAt(double[] parameters) {
+    return at(parameters, new double[0]);
+  }
+
   /** Value at z; writes the gradient unless the array is empty. */
   public double value(double[] z, double[] gradient) {
-    double[] p = generator.space().parametersAt(z);
+    return at(generator.space().parametersAt(z), gradient);
+  }
+
+  private double at(double[] p, double[] gradient) {
     Arrays.fill(gradient, 0);
     unique = solver.solve(p);
     if (!unique) {
