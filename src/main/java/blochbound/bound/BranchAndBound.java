@@ -23,6 +23,9 @@ import java.util.function.Supplier;
 public final class BranchAndBound {
   private static final double SMALLEST_HALF_WIDTH = 0x1p-40;
 
+  /** Relative width at which a bracket is closed to rounding, whatever was asked. */
+  private static final double CLOSED = 1e-10;
+
   private record Node(Region region, Cell cell, double certifiedLower, long number) {}
 
   private final Supplier<CellBound> bounds;
@@ -232,9 +235,9 @@ public final class BranchAndBound {
       ended = Optional.of(Reason.STOPPED);
     } else if (decideOnly && lower >= options.limit()) {
       ended = Optional.of(Reason.CERTIFIED);
-    } else if (decideOnly && attained < options.limit()) {
+    } else if (decideOnly && attained < options.limit() - 10 * CLOSED * (1 + Math.abs(attained))) {
       ended = Optional.of(Reason.REFUTED);
-    } else if (!decideOnly && attained - lower <= width) {
+    } else if (attained - lower <= (decideOnly ? CLOSED * (1 + Math.abs(attained)) : width)) {
       ended = Optional.of(Reason.NARROW);
     } else if (System.nanoTime() - started > options.time().toNanos()) {
       ended = Optional.of(Reason.TIME);
