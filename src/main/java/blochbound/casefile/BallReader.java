@@ -27,9 +27,7 @@ final class BallReader {
     Fields fields =
         new Fields(mapping, "`ball`", List.of("norm", "radius", "correlations"), scope.log());
     Optional<Norm> norm =
-        scope
-            .log()
-            .attempt(() -> fields.scalar("norm", "a norm").map(this::norm).orElse(Norm.BOX));
+        scope.log().attempt(() -> fields.scalar("norm", "a norm").map(this::norm).orElse(Norm.BOX));
     Optional<BigDecimal> radius =
         scope
             .log()
@@ -57,8 +55,7 @@ final class BallReader {
         return norm;
       }
     }
-    throw FaultSignal.of(
-        scalar.fault("unknown norm `" + scalar.text() + "`; allowed: inf, 2, 1"));
+    throw FaultSignal.of(scalar.fault("unknown norm `" + scalar.text() + "`; allowed: inf, 2, 1"));
   }
 
   private BigDecimal radius(YamlScalar scalar) {
@@ -85,7 +82,8 @@ final class BallReader {
   private Correlation correlation(YamlNode item) {
     String shape = "a correlation as {between: [a, b], value: 0.6}";
     Fields fields =
-        new Fields(item.asMapping(shape), "a correlation", List.of("between", "value"), scope.log());
+        new Fields(
+            item.asMapping(shape), "a correlation", List.of("between", "value"), scope.log());
     List<YamlNode> names =
         fields.needed("between").asSequence("two parameters, as in [a, b]").items();
     if (names.size() != 2) {
@@ -113,8 +111,7 @@ final class BallReader {
     int index =
         scope
             .parameterIndex(name.text())
-            .orElseThrow(
-                () -> FaultSignal.of(name.fault(scope.unknownParameter(name.text()))));
+            .orElseThrow(() -> FaultSignal.of(name.fault(scope.unknownParameter(name.text()))));
     if (scope.parameter(index).isConstant()) {
       throw FaultSignal.of(
           name.fault("`" + name.text() + "` has no tolerance, so it cannot be correlated"));

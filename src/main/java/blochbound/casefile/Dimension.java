@@ -37,8 +37,7 @@ record Dimension(int halves) {
       case -2 -> "1/time";
       case -1 -> "1/sqrt(time)";
       case 1 -> "sqrt(time)";
-      default ->
-          halves % 2 == 0 ? "time^(" + halves / 2 + ")" : "time^(" + halves + "/2)";
+      default -> halves % 2 == 0 ? "time^(" + halves / 2 + ")" : "time^(" + halves + "/2)";
     };
   }
 }

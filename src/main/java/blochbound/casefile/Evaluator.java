@@ -45,8 +45,7 @@ final class Evaluator {
 
   Value number(Expression.Number node) {
     ExactNumber value = ExactNumber.of(node.value()).times(node.unit().factor());
-    return checked(
-        Numeric.real(Scalar.constant(value), Dimension.of(node.unit())), node.at());
+    return checked(Numeric.real(Scalar.constant(value), Dimension.of(node.unit())), node.at());
   }
 
   Value name(Expression.Name node) {
@@ -118,7 +117,8 @@ final class Evaluator {
     Dimension dimension = a.isZero() ? b.dimension() : a.dimension();
     if (!b.isZero() && !b.dimension().equals(dimension)) {
       throw passage.fault(
-          at, "the terms of a sum have different dimensions: " + dimension + " and " + b.dimension());
+          at,
+          "the terms of a sum have different dimensions: " + dimension + " and " + b.dimension());
     }
     if (a instanceof Numeric x && b instanceof Numeric y) {
       charge(scope.limit().chargeSum(terms(x), terms(y)), at);
@@ -147,8 +147,7 @@ final class Evaluator {
     for (Factor factor : node.rest()) {
       int at = factor.operand().at();
       Value next = factor.operand().evaluate(this);
-      product =
-          times(product, factor.join() == Join.TIMES ? next : reciprocal(next, at), at);
+      product = times(product, factor.join() == Join.TIMES ? next : reciprocal(next, at), at);
     }
     return product;
   }
@@ -191,8 +190,7 @@ final class Evaluator {
     charge(scope.limit().chargeProduct(terms(n), terms(n)), at);
     Numeric inverse = functions.reciprocal(n, at);
     if (!n.isConstant()) {
-      Scalar must =
-          n.isReal() ? n.re() : n.re().times(n.re()).plus(n.im().times(n.im()));
+      Scalar must = n.isReal() ? n.re() : n.re().times(n.re()).plus(n.im().times(n.im()));
       scope.conditions().add(new Condition(Claim.NONZERO, must, passage, at, "the divisor"));
     }
     return checked(inverse, at);
@@ -260,7 +258,11 @@ final class Evaluator {
           .conditions()
           .add(
               new Condition(
-                  Claim.NONNEGATIVE, n.re(), passage, node.argument().at(), "the argument of sqrt"));
+                  Claim.NONNEGATIVE,
+                  n.re(),
+                  passage,
+                  node.argument().at(),
+                  "the argument of sqrt"));
     }
     return checked(functions.apply(node.function(), n, node.argument().at()), at);
   }

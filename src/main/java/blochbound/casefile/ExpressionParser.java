@@ -139,8 +139,7 @@ final class ExpressionParser {
       case SYMBOL, END -> {
         if (!token.is("(")) {
           throw passage.fault(
-              token.at(),
-              "expected a number, a name, a ket or a bracket, not " + token.shown());
+              token.at(), "expected a number, a name, a ket or a bracket, not " + token.shown());
         }
         yield inBrackets(token);
       }
@@ -235,9 +234,7 @@ final class ExpressionParser {
     String hint =
         behindNumber && token.kind() == Kind.NAME
             ? "; " + units.unknown(token.text())
-            : token.is("(")
-                ? "; functions are " + String.join(" ", Vocabulary.FUNCTIONS)
-                : "";
+            : token.is("(") ? "; functions are " + String.join(" ", Vocabulary.FUNCTIONS) : "";
     return passage.fault(
         token.at(),
         "an operator such as * is missing before "

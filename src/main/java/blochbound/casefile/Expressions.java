@@ -68,9 +68,7 @@ final class Expressions {
     }
     if (!value.form().isConstant()) {
       throw passage.fault(
-          what
-              + " must not depend on parameters, here on "
-              + part(value.form().terms().lastKey()));
+          what + " must not depend on parameters, here on " + part(value.form().terms().lastKey()));
     }
     return value.form().terms().get(Monomial.ONE);
   }

@@ -192,7 +192,9 @@ final class LocalOperators {
     }
     double copies = (double) n / local.centre().rows();
     double radius =
-        local.radius() == 0 ? 0 : Interval.of(copies).sqrt().times(Interval.of(local.radius())).upper();
+        local.radius() == 0
+            ? 0
+            : Interval.of(copies).sqrt().times(Interval.of(local.radius())).upper();
     return new ComplexBall(ComplexMatrix.of(n, n, re, im), radius);
   }
 

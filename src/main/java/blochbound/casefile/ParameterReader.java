@@ -33,18 +33,20 @@ final class ParameterReader {
 
   /** Reads all parameters in order and tells them to the scope. */
   void read(YamlNode section) {
-    Mapping mapping =
-        section.asMapping("parameters as a mapping, such as kappa: {nominal: 1 /us}");
+    Mapping mapping = section.asMapping("parameters as a mapping, such as kappa: {nominal: 1 /us}");
+    if (mapping.entries().size() > MOST_PARAMETERS) {
+      throw FaultSignal.of(
+          mapping
+              .entries()
+              .get(MOST_PARAMETERS)
+              .key()
+              .fault(
+                  "there are "
+                      + mapping.entries().size()
+                      + " parameters; this version handles up to "
+                      + MOST_PARAMETERS));
+    }
     for (Entry e : mapping.entries()) {
-      if (mapping.entries().indexOf(e) == MOST_PARAMETERS) {
-        throw FaultSignal.of(
-            e.key()
-                .fault(
-                    "there are "
-                        + mapping.entries().size()
-                        + " parameters; this version handles up to "
-                        + MOST_PARAMETERS));
-      }
       scope.addParameter(e.key(), scope.log().attempt(() -> parameter(e)));
     }
   }

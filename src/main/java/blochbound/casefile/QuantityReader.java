@@ -112,9 +112,7 @@ final class QuantityReader {
       return new Quantity(value, new Unit(symbol, ExactNumber.ONE, 0), at);
     }
     Unit known =
-        units
-            .find(symbol)
-            .orElseThrow(() -> passage.fault(unit.start(1), units.unknown(symbol)));
+        units.find(symbol).orElseThrow(() -> passage.fault(unit.start(1), units.unknown(symbol)));
     if (ExactNumber.of(value).times(known.factor()).enclosure().magnitude() > LARGEST) {
       throw passage.fault(at, "the quantity is over 1e300 in the time unit of the case");
     }

@@ -74,8 +74,7 @@ final class SiteReader {
 
   private static void checkCount(int levels, YamlNode at) {
     if (levels < 1 || levels > MOST_LEVELS) {
-      throw FaultSignal.of(
-          at.fault("a site has 1 to " + MOST_LEVELS + " levels, not " + levels));
+      throw FaultSignal.of(at.fault("a site has 1 to " + MOST_LEVELS + " levels, not " + levels));
     }
   }
 

@@ -52,8 +52,7 @@ final class ToleranceReader {
       throw FaultSignal.of(ends.fault("the ends of the range are in the wrong order"));
     }
     if (lower.compareTo(nominal.value()) > 0 || nominal.value().compareTo(upper) > 0) {
-      throw FaultSignal.of(
-          ends.fault("the range must contain the nominal value " + text(nominal)));
+      throw FaultSignal.of(ends.fault("the range must contain the nominal value " + text(nominal)));
     }
     return new Range(lower, upper);
   }
