@@ -11,6 +11,7 @@ import java.util.Optional;
 import java.util.PriorityQueue;
 import java.util.concurrent.atomic.AtomicBoolean;
 import java.util.function.Supplier;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Best-first branch and bound for the minimum of a function over the tolerance ball.
@@ -155,7 +156,7 @@ public final class BranchAndBound {
   }
 
   /** The next region to split, or null when the work has ended. */
-  private synchronized Node take() {
+  private synchronized @Nullable Node take() {
     while (true) {
       if (finished()) {
         notifyAll();

@@ -11,15 +11,17 @@ import blochbound.interval.Rounding;
 import blochbound.linalg.LuDecomposition;
 import blochbound.linalg.SparseMatrix;
 import java.util.Arrays;
+import java.util.Objects;
+import org.jspecify.annotations.Nullable;
 
 /**
  * The polynomial trial observable on one region and the certified size of what it leaves over.
  *
- * <p>For Y(x) = sum_{|a| <= K} x^a Y_a and phi(x) = sum phi_a x^a, every stationary state rho of
+ * <p>For Y(x) = sum_{|a| &lt;= K} x^a Y_a and phi(x) = sum phi_a x^a, every stationary state rho of
  * L(x) has tr(W rho) = phi(x) + tr(S(x) rho) with S = W + L^+[Y] - phi 1
- * (notes/dual-observable.md), hence tr(W rho) >= phi(x) - sum_a kappa_a - error on x in [-1, 1]^m.
- * The Y_a solve Lambda_0^+ Y_a = phi_a 1 - V_a approximately; whatever is left appears in S_a, all
- * of which are counted.
+ * (notes/dual-observable.md), hence tr(W rho) &gt;= phi(x) - sum_a kappa_a - error on x in [-1,
+ * 1]^m. The Y_a solve Lambda_0^+ Y_a = phi_a 1 - V_a approximately; whatever is left appears in
+ * S_a, all of which are counted.
  *
  * <p>All matrices are vectors of Bloch coordinates of length N^2. Workspace for one thread; no
  * allocation for a multi-index.
@@ -40,7 +42,7 @@ final class DualKernel {
   private final double[] scratch;
   private final double[] frobenius;
   private double[][] inverse = {};
-  private RegionExpansion expansion;
+  private @Nullable RegionExpansion expansion;
   private double[][] s = {};
   private double[] phi = {};
   private int solved;
@@ -81,6 +83,10 @@ final class DualKernel {
       prepareShifted(centre);
     }
     inverse = size - 1 <= LARGEST_INVERSE ? lu.inverse() : new double[0][];
+  }
+
+  private RegionExpansion expansion() {
+    return Objects.requireNonNull(expansion, "a region is prepared first");
   }
 
   private void prepareShifted(double[] centre) {
@@ -181,7 +187,7 @@ final class DualKernel {
     sumOfY += norm(y);
     for (int j = 0; j < frobenius.length; j++) {
       SparseMatrix matrix = generator.terms().get(j).matrix();
-      TaylorModel coefficient = expansion.coefficient(j);
+      TaylorModel coefficient = expansion().coefficient(j);
       boolean needsNorm = coefficient.remainder() > 1e-11 * Math.abs(coefficient.constantTerm());
       if (!needsNorm && coefficient.size() <= 2 && matrix.entries() <= 2 * size) {
         for (int k = 0; k < coefficient.size(); k++) {
@@ -255,7 +261,7 @@ final class DualKernel {
     long operations = 12;
     for (int j = 0; j < frobenius.length; j++) {
       GeneratorTerm term = generator.terms().get(j);
-      TaylorModel coefficient = expansion.coefficient(j);
+      TaylorModel coefficient = expansion().coefficient(j);
       double sum = coefficient.sumUp();
       double rest = coefficient.remainder();
       operations += coefficient.size() + term.matrix().longestColumn();
