@@ -59,9 +59,7 @@ final class CertifyCommand implements Callable<Integer> {
     for (DesignCase designCase : cases) {
       worst =
           worst.orWorse(
-              session.isStopped()
-                  ? ExitCode.INTERRUPTED
-                  : certify(designCase, options, results));
+              session.isStopped() ? ExitCode.INTERRUPTED : certify(designCase, options, results));
     }
     return worst.orWorse(write(results)).number();
   }
@@ -95,8 +93,7 @@ final class CertifyCommand implements Callable<Integer> {
     }
     try {
       output.write(
-          () ->
-              files.size() == 1 ? CertifyJson.of(results.get(0)) : CertifyJson.ofAll(results),
+          () -> files.size() == 1 ? CertifyJson.of(results.get(0)) : CertifyJson.ofAll(results),
           session);
       return ExitCode.SUCCESS;
     } catch (OutputException e) {

@@ -45,7 +45,9 @@ public final class CertifyJson {
         });
     json.integer("seed", result.seed());
     json.object(
-        "steadyState", result.status(), (fields, status) -> steadyState(fields, parameters, status));
+        "steadyState",
+        result.status(),
+        (fields, status) -> steadyState(fields, parameters, status));
     json.array(
         "requirements",
         result.requirements(),
