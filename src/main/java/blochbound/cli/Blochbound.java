@@ -42,8 +42,7 @@ public final class Blochbound {
    * @return the exit code
    */
   public static int run(String[] arguments, PrintStream out, PrintStream err) {
-    return run(
-        arguments, new Session(Engine.STANDARD, out, err, Attended.NO, new AtomicBoolean()));
+    return run(arguments, new Session(Engine.STANDARD, out, err, Attended.NO, new AtomicBoolean()));
   }
 
   /** Runs the program in a session. */

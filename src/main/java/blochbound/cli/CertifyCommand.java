@@ -1,5 +1,6 @@
 package blochbound.cli;
 
+import blochbound.casefile.CaseReader.RequirementRule;
 import blochbound.cli.Session.Attended;
 import blochbound.model.DesignCase;
 import blochbound.report.CertifyJson;
@@ -52,16 +53,14 @@ final class CertifyCommand implements Callable<Integer> {
   @Override
   public Integer call() throws Exception {
     CertificationOptions options = study.options();
-    List<DesignCase> cases = session.read(files);
+    List<DesignCase> cases = session.read(files, RequirementRule.REQUIRED);
     output.check();
     List<CertificationResult> results = new ArrayList<>();
     ExitCode worst = ExitCode.SUCCESS;
     for (DesignCase designCase : cases) {
       worst =
           worst.orWorse(
-              session.isStopped()
-                  ? ExitCode.INTERRUPTED
-                  : certify(designCase, options, results));
+              session.isStopped() ? ExitCode.INTERRUPTED : certify(designCase, options, results));
     }
     return worst.orWorse(write(results)).number();
   }
@@ -95,8 +94,7 @@ final class CertifyCommand implements Callable<Integer> {
     }
     try {
       output.write(
-          () ->
-              files.size() == 1 ? CertifyJson.of(results.get(0)) : CertifyJson.ofAll(results),
+          () -> files.size() == 1 ? CertifyJson.of(results.get(0)) : CertifyJson.ofAll(results),
           session);
       return ExitCode.SUCCESS;
     } catch (OutputException e) {

@@ -41,11 +41,7 @@ record BracketDigits(int scale, Sense sense, BigDecimal limit) {
     found.ifPresent(values::add);
     certified.ifPresent(values::add);
     int top =
-        values.stream()
-            .filter(v -> v.signum() != 0)
-            .mapToInt(NumberText::exponent)
-            .max()
-            .orElse(0);
+        values.stream().filter(v -> v.signum() != 0).mapToInt(NumberText::exponent).max().orElse(0);
     int inside = Math.max(separation(certified, found), separation(nominal, found)) + 1;
     int atLimit =
         Math.max(

@@ -75,9 +75,7 @@ public final class CertifyText {
         };
     String reason = status.kind() == Kind.UNIQUE ? "" : status.reason();
     List<String> lines = new ArrayList<>(TextLayout.hanging("steady state: ", sentence + reason));
-    status
-        .point()
-        .ifPresent(p -> lines.addAll(TextLayout.hanging("  at ", point(parameters, p))));
+    status.point().ifPresent(p -> lines.addAll(TextLayout.hanging("  at ", point(parameters, p))));
     return lines;
   }
 
@@ -125,7 +123,8 @@ public final class CertifyText {
     List<String> lines = new ArrayList<>();
     if (result.interrupted()) {
       lines.addAll(
-          TextLayout.paragraph("Interrupted before the end: the values above are those so far.", 0));
+          TextLayout.paragraph(
+              "Interrupted before the end: the values above are those so far.", 0));
     }
     String verdict = result.verdict().key() + " - " + reason(result);
     lines.addAll(TextLayout.hanging("verdict: ", verdict));

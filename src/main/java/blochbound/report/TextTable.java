@@ -7,8 +7,9 @@ import java.util.Collections;
 import java.util.List;
 
 /**
- * A table of plain text: aligned columns, two blanks apart, at most {@link TextLayout#WIDTH} columns
- * wide. Where the cells need more room the widest columns are narrowed and their cells wrapped.
+ * A table of plain text: aligned columns, two blanks apart, at most {@link TextLayout#WIDTH}
+ * columns wide. Where the cells need more room the widest columns are narrowed and their cells
+ * wrapped.
  */
 final class TextTable {
   private static final String SEPARATOR = "  ";
