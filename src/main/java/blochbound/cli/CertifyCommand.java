@@ -1,5 +1,6 @@
 package blochbound.cli;
 
+import blochbound.casefile.CaseReader.RequirementRule;
 import blochbound.cli.Session.Attended;
 import blochbound.model.DesignCase;
 import blochbound.report.CertifyJson;
@@ -52,7 +53,7 @@ final class CertifyCommand implements Callable<Integer> {
   @Override
   public Integer call() throws Exception {
     CertificationOptions options = study.options();
-    List<DesignCase> cases = session.read(files);
+    List<DesignCase> cases = session.read(files, RequirementRule.REQUIRED);
     output.check();
     List<CertificationResult> results = new ArrayList<>();
     ExitCode worst = ExitCode.SUCCESS;
@@ -80,6 +81,7 @@ final class CertifyCommand implements Callable<Integer> {
     }
   }
 
+  @SuppressWarnings("try") // the progress line only has to be taken away at the end
   private CertificationResult run(DesignCase designCase, CertificationOptions options) {
     Attended attended = output.isQuiet() ? Attended.NO : session.attended();
     try (Progress progress = Progress.show(attended, session.err(), designCase.title())) {

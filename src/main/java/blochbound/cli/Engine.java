@@ -2,6 +2,7 @@ package blochbound.cli;
 
 import blochbound.casefile.CaseFaultException;
 import blochbound.casefile.CaseReader;
+import blochbound.casefile.CaseReader.RequirementRule;
 import blochbound.model.DesignCase;
 import blochbound.study.Certification;
 import blochbound.study.CertificationOptions;
@@ -15,8 +16,8 @@ interface Engine {
   Engine STANDARD =
       new Engine() {
         @Override
-        public DesignCase read(Path file) throws CaseFaultException {
-          return CaseReader.read(file);
+        public DesignCase read(Path file, RequirementRule rule) throws CaseFaultException {
+          return CaseReader.read(file, rule);
         }
 
         @Override
@@ -31,7 +32,7 @@ interface Engine {
    *
    * @throws CaseFaultException with all faults of the file
    */
-  DesignCase read(Path file) throws CaseFaultException;
+  DesignCase read(Path file, RequirementRule rule) throws CaseFaultException;
 
   /** Runs the main study; ends early with the brackets so far once {@code stop} is set. */
   CertificationResult certify(

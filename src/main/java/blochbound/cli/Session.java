@@ -1,6 +1,7 @@
 package blochbound.cli;
 
 import blochbound.casefile.CaseFaultException;
+import blochbound.casefile.CaseReader.RequirementRule;
 import blochbound.casefile.Fault;
 import blochbound.model.DesignCase;
 import java.io.PrintStream;
@@ -38,12 +39,12 @@ record Session(
    *
    * @throws CaseFaultException with the faults of all files
    */
-  List<DesignCase> read(List<Path> files) throws CaseFaultException {
+  List<DesignCase> read(List<Path> files, RequirementRule rule) throws CaseFaultException {
     List<DesignCase> cases = new ArrayList<>();
     List<Fault> faults = new ArrayList<>();
     for (Path file : files) {
       try {
-        cases.add(engine.read(file));
+        cases.add(engine.read(file, rule));
       } catch (CaseFaultException e) {
         faults.addAll(e.faults());
       }

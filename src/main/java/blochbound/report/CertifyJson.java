@@ -1,7 +1,6 @@
 package blochbound.report;
 
 import blochbound.model.Parameter;
-import blochbound.model.Requirement;
 import blochbound.study.CertificationResult;
 import blochbound.study.FoundPoint;
 import blochbound.study.Guarantee;
@@ -37,12 +36,7 @@ public final class CertifyJson {
   private static void result(JsonFields json, CertificationResult result) throws IOException {
     List<Parameter> parameters = result.designCase().device().parameters();
     json.text("format", FORMAT);
-    json.object(
-        "case",
-        fields -> {
-          fields.text("title", result.designCase().title());
-          fields.text("sha256", result.designCase().sha256());
-        });
+    json.object("case", fields -> fields.identity(result.designCase()));
     json.integer("seed", result.seed());
     json.object(
         "steadyState",
@@ -71,12 +65,7 @@ public final class CertifyJson {
 
   private static void requirement(
       JsonFields json, List<Parameter> parameters, RequirementResult result) throws IOException {
-    Requirement requirement = result.requirement();
-    json.text("name", requirement.name());
-    json.text("measure", requirement.measureText());
-    json.text("sense", requirement.sense().key());
-    json.decimal("limit", requirement.limit());
-    json.text("unit", requirement.unit().symbol());
+    json.demand(result.requirement());
     json.real("nominal", result.nominal().orElse(Double.NaN));
     json.object(
         "worstFound", result.worstFound(), (fields, found) -> found(fields, parameters, found));

@@ -1,5 +1,7 @@
 package blochbound.report;
 
+import blochbound.model.DesignCase;
+import blochbound.model.Requirement;
 import com.fasterxml.jackson.core.JsonFactory;
 import com.fasterxml.jackson.core.JsonGenerator;
 import com.fasterxml.jackson.core.util.DefaultIndenter;
@@ -108,6 +110,15 @@ final class JsonFields {
     generator.writeStringField(name, value);
   }
 
+  /** A text, or null when there is none. */
+  void text(String name, Optional<String> value) throws IOException {
+    if (value.isPresent()) {
+      text(name, value.get());
+    } else {
+      generator.writeNullField(name);
+    }
+  }
+
   void truth(String name, boolean value) throws IOException {
     generator.writeBooleanField(name, value);
   }
@@ -128,5 +139,20 @@ final class JsonFields {
     } else {
       generator.writeNull();
     }
+  }
+
+  /** What identifies a case. */
+  void identity(DesignCase designCase) throws IOException {
+    text("title", designCase.title());
+    text("sha256", designCase.sha256());
+  }
+
+  /** What a requirement demands. */
+  void demand(Requirement requirement) throws IOException {
+    text("name", requirement.name());
+    text("measure", requirement.measureText());
+    text("sense", requirement.sense().key());
+    decimal("limit", requirement.limit());
+    text("unit", requirement.unit().symbol());
   }
 }

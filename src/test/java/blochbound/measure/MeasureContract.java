@@ -9,8 +9,12 @@ import blochbound.check.BrokenGuaranteeException;
 import blochbound.interval.Interval;
 import blochbound.linalg.Hermitian;
 import java.math.BigDecimal;
+import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 
@@ -23,6 +27,7 @@ import org.junit.jupiter.params.provider.ValueSource;
  * held without any tolerance for double rounding; 1e-20 stands for the error of the reference
  * itself.
  */
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 abstract class MeasureContract {
   private static final BigDecimal REFERENCE_ERROR = new BigDecimal("1e-20");
   private static final int STATES = 48;
@@ -37,7 +42,7 @@ abstract class MeasureContract {
   /** The measure by its definition. */
   abstract BigDecimal precise(PreciseMatrix state);
 
-  /** Bound of the error of {@code value} at exact states of full rank that are well conditioned. */
+  /** Bound of the error of {@code value} at exact states. */
   double valueError() {
     return 1e-13;
   }
@@ -52,70 +57,78 @@ abstract class MeasureContract {
     return new ExactStates(seed, factors()[0], factors()[1]);
   }
 
+  /** An exact state, a matrix to make bounds at, their distance, and the true value. */
+  private record Draw(Hermitian state, Hermitian near, double distance, BigDecimal truth) {}
+
+  private final Map<Long, List<Draw>> drawn = new HashMap<>();
+
+  private List<Draw> draws(long seed) {
+    return drawn.computeIfAbsent(seed, this::draw);
+  }
+
+  private List<Draw> draw(long seed) {
+    ExactStates states = states(seed);
+    List<Draw> draws = new ArrayList<>();
+    for (int k = 0; k < STATES; k++) {
+      Hermitian state = states.next(k);
+      Hermitian near = states.near(state, k / 8);
+      BigDecimal truth = precise(PreciseMatrix.of(state));
+      draws.add(new Draw(state, near, distanceUp(state, near), truth));
+    }
+    return draws;
+  }
+
   private static double distanceUp(Hermitian a, Hermitian b) {
     double norm = PreciseMatrix.of(a).minus(PreciseMatrix.of(b)).frobeniusNorm().doubleValue();
     return norm == 0 ? 0 : Math.nextUp(norm);
   }
 
-  private static BigDecimal affine(AffineBound bound, PreciseMatrix state) {
-    return PreciseMatrix.of(bound.operator()).inner(state);
+  private static BigDecimal affine(AffineBound bound, Hermitian state) {
+    return PreciseMatrix.of(bound.operator()).inner(PreciseMatrix.of(state));
   }
 
   @ParameterizedTest(name = "seed {0}")
   @ValueSource(longs = {1, 2, 3})
   void lowerBoundsStayBelowTheMeasureAtExactStates(long seed) {
-    ExactStates states = states(seed);
-    for (int k = 0; k < STATES; k++) {
-      Hermitian state = states.next(k);
-      Hermitian near = states.near(state, k / 8);
-      PreciseMatrix exact = PreciseMatrix.of(state);
-      BigDecimal truth = precise(exact).add(REFERENCE_ERROR);
-      double distance = distanceUp(state, near);
-      for (AffineBound bound : measure().lowerBounds(near)) {
-        double excess = bound.excess().applyAsDouble(distance);
+    for (Draw draw : draws(seed)) {
+      BigDecimal truth = draw.truth.add(REFERENCE_ERROR);
+      for (AffineBound bound : measure().lowerBounds(draw.near)) {
+        double excess = bound.excess().applyAsDouble(draw.distance);
         assertFalse(Double.isNaN(excess));
         if (excess < Double.POSITIVE_INFINITY) {
-          BigDecimal claim = affine(bound, exact).subtract(new BigDecimal(excess));
-          assertTrue(claim.compareTo(truth) <= 0, k + ": " + claim + " above " + truth);
+          BigDecimal claim = affine(bound, draw.state).subtract(new BigDecimal(excess));
+          assertTrue(claim.compareTo(truth) <= 0, claim + " above " + truth + draw);
         }
       }
     }
   }
 
   @ParameterizedTest(name = "seed {0}")
-  @ValueSource(longs = {4, 5, 6})
+  @ValueSource(longs = {1, 2, 3})
   void upperBoundsStayAboveTheMeasureAtExactStates(long seed) {
-    ExactStates states = states(seed);
-    for (int k = 0; k < STATES; k++) {
-      Hermitian state = states.next(k);
-      Hermitian near = states.near(state, k / 8);
-      PreciseMatrix exact = PreciseMatrix.of(state);
-      BigDecimal truth = precise(exact).subtract(REFERENCE_ERROR);
-      double distance = distanceUp(state, near);
-      for (AffineBound bound : measure().upperBounds(near)) {
-        double excess = bound.excess().applyAsDouble(distance);
+    for (Draw draw : draws(seed)) {
+      BigDecimal truth = draw.truth.subtract(REFERENCE_ERROR);
+      for (AffineBound bound : measure().upperBounds(draw.near)) {
+        double excess = bound.excess().applyAsDouble(draw.distance);
         assertFalse(Double.isNaN(excess));
         if (excess < Double.POSITIVE_INFINITY) {
-          BigDecimal claim = affine(bound, exact).add(new BigDecimal(excess));
-          assertTrue(claim.compareTo(truth) >= 0, k + ": " + claim + " below " + truth);
+          BigDecimal claim = affine(bound, draw.state).add(new BigDecimal(excess));
+          assertTrue(claim.compareTo(truth) >= 0, claim + " below " + truth + draw);
         }
       }
     }
   }
 
   @ParameterizedTest(name = "seed {0}")
-  @ValueSource(longs = {7, 8})
+  @ValueSource(longs = {1, 2, 3})
   void enclosureContainsTheMeasureOfEveryStateInReach(long seed) {
-    ExactStates states = states(seed);
-    for (int k = 0; k < STATES; k++) {
-      Hermitian state = states.next(k);
-      Hermitian near = states.near(state, k / 8);
-      Interval enclosure = measure().enclosure(near, distanceUp(state, near));
-      BigDecimal truth = precise(PreciseMatrix.of(state));
+    for (Draw draw : draws(seed)) {
+      Interval enclosure = measure().enclosure(draw.near, draw.distance);
+      BigDecimal lower = new BigDecimal(enclosure.lower()).subtract(REFERENCE_ERROR);
+      BigDecimal upper = new BigDecimal(enclosure.upper()).add(REFERENCE_ERROR);
       assertTrue(
-          new BigDecimal(enclosure.lower()).compareTo(truth.add(REFERENCE_ERROR)) <= 0
-              && new BigDecimal(enclosure.upper()).compareTo(truth.subtract(REFERENCE_ERROR)) >= 0,
-          k + ": " + enclosure + " misses " + truth);
+          lower.compareTo(draw.truth) <= 0 && upper.compareTo(draw.truth) >= 0,
+          enclosure + " misses " + draw);
       assertTrue(measure().range().contains(enclosure));
     }
   }
@@ -134,13 +147,12 @@ abstract class MeasureContract {
 
   @Test
   void valueMeetsTheDefinition() {
-    ExactStates states = states(10);
+    List<Draw> draws = draws(1);
     for (int k = 0; k < STATES; k++) {
-      Hermitian state = states.next(k);
-      double truth = precise(PreciseMatrix.of(state)).doubleValue();
-      // Near-pure states (kinds 3, 4) have eigenvalues at the noise of doubles: see valueError.
+      // Kind 4 has an eigenvalue of about 1e-12, which square roots of doubles blur.
       double allowed = k % 8 == 4 ? Math.max(valueError(), 1e-9) : valueError();
-      assertEquals(truth, measure().value(state), allowed, "" + k);
+      double value = measure().value(draws.get(k).state);
+      assertEquals(draws.get(k).truth.doubleValue(), value, allowed, "" + draws.get(k));
     }
   }
 
