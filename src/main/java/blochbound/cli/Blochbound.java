@@ -22,6 +22,7 @@ public final class Blochbound {
   private Blochbound() {}
 
   /** Runs the program on the standard streams and ends the virtual machine. */
+  @SuppressWarnings("SystemConsoleNull") // null without a terminal on the releases built for
   public static void main(String[] arguments) {
     PrintStream out = stream(FileDescriptor.out);
     PrintStream err = stream(FileDescriptor.err);
@@ -66,8 +67,8 @@ public final class Blochbound {
     line.addSubcommand(new ShowCommand(session));
     prepare(line);
     line.getSubcommands().values().forEach(Blochbound::prepare);
-    return line.setOut(new PrintWriter(session.out(), true))
-        .setErr(new PrintWriter(session.err(), true))
+    return line.setOut(new PrintWriter(session.out(), true, StandardCharsets.UTF_8))
+        .setErr(new PrintWriter(session.err(), true, StandardCharsets.UTF_8))
         .setColorScheme(Help.defaultColorScheme(Ansi.OFF))
         .setUsageHelpWidth(100)
         .setExpandAtFiles(false)
