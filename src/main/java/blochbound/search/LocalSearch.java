@@ -25,16 +25,19 @@ record LocalSearch(BallProjection ball) {
   /** Share of the first gradient below which a projected gradient counts as zero. */
   private static final double FLAT = 1e-6;
 
+  /** Slopes below this one count as zero, so that its inverse is a number. */
+  private static final double SMALLEST_SLOPE = 1e-300;
+
   /** Decrease over a full memory, as a share of the values' size, that counts as none. */
   private static final double NO_PROGRESS = 1e-14;
 
   /** Runs from the start, moved into the ball; the evaluator holds the best point. */
   void run(Evaluator evaluator, double[] start) {
     Iterate at = Iterate.at(evaluator, ball.project(start));
-    if (!Double.isFinite(at.value()) || Iterate.largest(at.gradient()) == 0) {
+    double slope = Iterate.largest(at.gradient());
+    if (!Double.isFinite(at.value()) || slope < SMALLEST_SLOPE) {
       return;
     }
-    double slope = Iterate.largest(at.gradient());
     double step = 1 / slope;
     double[] recent = new double[MEMORY];
     Arrays.fill(recent, at.value());
@@ -96,8 +99,7 @@ record LocalSearch(BallProjection ball) {
     double[] s = Iterate.difference(next.x(), at.x());
     double[] y = Iterate.difference(next.gradient(), at.gradient());
     double curvature = Iterate.inner(s, y);
-    double size = Iterate.largest(next.gradient());
-    double longest = size == 0 ? 1 : 1e3 / size;
+    double longest = 1e3 / Math.max(SMALLEST_SLOPE, Iterate.largest(next.gradient()));
     if (!(curvature > 0)) {
       return longest;
     }
