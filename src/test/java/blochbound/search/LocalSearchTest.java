@@ -102,8 +102,8 @@ class LocalSearchTest {
       String name, Norm norm, double[] start, double minimum, Objective objective) {
     Evaluator evaluator = new Evaluator(objective, BoxSearchTest.unlimited());
     new LocalSearch(new BallProjection(norm)).run(evaluator, start);
-    assertEquals(minimum, evaluator.bestValue(), 1e-6, evaluator.count() + " evaluations");
-    assertTrue(evaluator.count() < 3000, "" + evaluator.count());
+    assertEquals(minimum, evaluator.bestValue(), 1e-7, evaluator.count() + " evaluations");
+    assertTrue(evaluator.count() < 1000, "" + evaluator.count());
   }
 
   @Test
