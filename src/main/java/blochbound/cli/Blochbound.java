@@ -23,12 +23,17 @@ public final class Blochbound {
 
   /** Runs the program on the standard streams and ends the virtual machine. */
   public static void main(String[] arguments) {
+    runUntilSignal(arguments, Engine.STANDARD);
+  }
+
+  /** Runs the program with an engine as {@link #main} does. */
+  static void runUntilSignal(String[] arguments, Engine engine) {
     PrintStream out = stream(FileDescriptor.out);
     PrintStream err = stream(FileDescriptor.err);
     Attended attended = System.console() == null ? Attended.NO : Attended.TERMINAL;
     int code;
     try (Interruption interruption = Interruption.watch()) {
-      code = run(arguments, new Session(Engine.STANDARD, out, err, attended, interruption.stop()));
+      code = run(arguments, new Session(engine, out, err, attended, interruption.stop()));
     }
     System.exit(code);
   }
