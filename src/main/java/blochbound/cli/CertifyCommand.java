@@ -83,8 +83,11 @@ final class CertifyCommand implements Callable<Integer> {
 
   private CertificationResult run(DesignCase designCase, CertificationOptions options) {
     Attended attended = output.isQuiet() ? Attended.NO : session.attended();
-    try (Progress progress = Progress.show(attended, session.err(), designCase.title())) {
+    Progress progress = Progress.show(attended, session.err(), designCase.title());
+    try {
       return session.engine().certify(designCase, options, session.stop());
+    } finally {
+      progress.end();
     }
   }
 

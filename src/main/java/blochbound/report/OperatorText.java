@@ -39,7 +39,7 @@ final class OperatorText {
     return terms;
   }
 
-  /** A square matrix as a sum of |row><column|, or its size where that is long. */
+  /** A square matrix as a sum of {@code |row><column|}, or its size where that is long. */
   String matrix(ComplexBall ball) {
     ComplexMatrix m = ball.centre();
     if (isMultipleOfIdentity(ball)) {

@@ -100,6 +100,13 @@ class BlochboundTest {
   }
 
   @Test
+  void errorOfTheMachineWhileReadingIsAnInternalError() {
+    InProcess run = InProcess.run("show", "endless");
+    assertEquals(1, run.code());
+    assertTrue(run.err().contains("internal error"), run.err());
+  }
+
+  @Test
   void nothingIsCertifiedAfterAStop() {
     FakeEngine engine = new FakeEngine();
     InProcess run = InProcess.run(engine, "certify", "stopped", "certified");

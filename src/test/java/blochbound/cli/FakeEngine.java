@@ -15,7 +15,8 @@ import java.util.concurrent.atomic.AtomicBoolean;
 
 /**
  * An engine whose outcome is the name of the case file: {@code certified}, {@code refuted}, {@code
- * undecided}, {@code faulty}, {@code defect}, {@code exhausted} or {@code stopped}.
+ * undecided}, {@code faulty}, {@code defect}, {@code exhausted}, {@code endless} or {@code
+ * stopped}.
  */
 final class FakeEngine implements Engine {
   final List<CertificationOptions> options = new ArrayList<>();
@@ -26,6 +27,9 @@ final class FakeEngine implements Engine {
     rules.add(rule);
     if (file.toString().equals("faulty")) {
       throw new CaseFaultException(List.of(new Fault("faulty", 3, 7, "unknown key `sties`")));
+    }
+    if (file.toString().equals("endless")) {
+      throw new StackOverflowError();
     }
     return HandMade.designCase(file.toString(), HandMade.emitter());
   }

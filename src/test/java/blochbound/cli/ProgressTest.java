@@ -18,8 +18,8 @@ class ProgressTest {
   @Test
   void shortTasksShowNothing() {
     ByteArrayOutputStream bytes = new ByteArrayOutputStream();
-    Progress.show(Attended.NO, InProcess.stream(bytes), "task").close();
-    Progress.show(Attended.TERMINAL, InProcess.stream(bytes), "task").close();
+    Progress.show(Attended.NO, InProcess.stream(bytes), "task").end();
+    Progress.show(Attended.TERMINAL, InProcess.stream(bytes), "task").end();
     assertEquals(0, bytes.size());
   }
 }
