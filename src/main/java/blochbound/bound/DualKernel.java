@@ -5,19 +5,23 @@ import blochbound.generator.BlochGenerator;
 import blochbound.generator.GeneratorTerm;
 import blochbound.generator.MultiIndexTable;
 import blochbound.generator.RegionExpansion;
+import blochbound.generator.SteadyStateSolver;
 import blochbound.generator.TaylorModel;
 import blochbound.interval.Rounding;
 import blochbound.linalg.LuDecomposition;
+import blochbound.linalg.SparseMatrix;
 import java.util.Arrays;
+import java.util.Objects;
+import org.jspecify.annotations.Nullable;
 
 /**
  * The polynomial trial observable on one region and the certified size of what it leaves over.
  *
- * <p>For Y(x) = sum_{|a| <= K} x^a Y_a and phi(x) = sum phi_a x^a, every stationary state rho of
+ * <p>For Y(x) = sum_{|a| &lt;= K} x^a Y_a and phi(x) = sum phi_a x^a, every stationary state rho of
  * L(x) has tr(W rho) = phi(x) + tr(S(x) rho) with S = W + L^+[Y] - phi 1
- * (notes/dual-observable.md), hence tr(W rho) >= phi(x) - sum_a kappa_a - error on x in [-1, 1]^m.
- * The Y_a solve Lambda_0^+ Y_a = phi_a 1 - V_a approximately; whatever is left appears in S_a, all
- * of which are counted.
+ * (notes/dual-observable.md), hence tr(W rho) &gt;= phi(x) - sum_a kappa_a - error on x in [-1,
+ * 1]^m. The Y_a solve Lambda_0^+ Y_a = phi_a 1 - V_a approximately; whatever is left appears in
+ * S_a, all of which are counted.
  *
  * <p>All matrices are vectors of Bloch coordinates of length N^2. Workspace for one thread; no
  * allocation for a multi-index.
@@ -31,13 +35,14 @@ final class DualKernel {
   private final double rootLevels;
   private final LuDecomposition lu;
   private final double[] offset;
-  private final double[] product;
+  private final double[] y;
+  private final double[] image;
   private final double[] right;
   private final double[] solution;
   private final double[] scratch;
   private final double[] frobenius;
   private double[][] inverse = {};
-  private RegionExpansion expansion;
+  private @Nullable RegionExpansion expansion;
   private double[][] s = {};
   private double[] phi = {};
   private int solved;
@@ -52,7 +57,8 @@ final class DualKernel {
     rootLevels = Math.sqrt(generator.basis().levels());
     lu = new LuDecomposition(size - 1);
     offset = new double[size - 1];
-    product = new double[size];
+    y = new double[size];
+    image = new double[size];
     right = new double[size - 1];
     solution = new double[size - 1];
     scratch = new double[size - 1];
@@ -73,10 +79,14 @@ final class DualKernel {
     }
     shift = 0;
     lu.factor();
-    if (lu.pivotRatio() < 1e-13) {
+    if (lu.smallestRelativePivot() < SteadyStateSolver.SINGULAR_PIVOT) {
       prepareShifted(centre);
     }
     inverse = size - 1 <= LARGEST_INVERSE ? lu.inverse() : new double[0][];
+  }
+
+  private RegionExpansion expansion() {
+    return Objects.requireNonNull(expansion, "a region is prepared first");
   }
 
   private void prepareShifted(double[] centre) {
@@ -172,30 +182,26 @@ final class DualKernel {
 
   /** Adds L^+[Y_a] to all S_{a+b}. */
   private void scatter(int a, MultiIndexTable table) {
-    double[] y = product;
-    double[] image = imageScratch();
     y[0] = 0;
     System.arraycopy(solution, 0, y, 1, size - 1);
     sumOfY += norm(y);
     for (int j = 0; j < frobenius.length; j++) {
-      generator.terms().get(j).matrix().transposeTimes(y, image);
-      TaylorModel coefficient = expansion.coefficient(j);
+      SparseMatrix matrix = generator.terms().get(j).matrix();
+      TaylorModel coefficient = expansion().coefficient(j);
+      boolean needsNorm = coefficient.remainder() > 1e-11 * Math.abs(coefficient.constantTerm());
+      if (!needsNorm && coefficient.size() <= 2 && matrix.entries() <= 2 * size) {
+        for (int k = 0; k < coefficient.size(); k++) {
+          double[] target = s[table.sum(a, coefficient.index(k))];
+          matrix.addTransposeTimes(coefficient.coefficient(k), y, target);
+        }
+        continue;
+      }
+      matrix.transposeTimes(y, image);
       for (int k = 0; k < coefficient.size(); k++) {
         add(s[table.sum(a, coefficient.index(k))], image, coefficient.coefficient(k));
       }
-      if (coefficient.remainder() > 1e-11 * Math.abs(coefficient.constantTerm())) {
-        sumOfImages[j] += norm(image);
-      }
+      sumOfImages[j] += needsNorm ? norm(image) : 0;
     }
-  }
-
-  private double[] image = {};
-
-  private double[] imageScratch() {
-    if (image.length != size) {
-      image = new double[size];
-    }
-    return image;
   }
 
   private static void add(double[] target, double[] source, double factor) {
@@ -249,25 +255,24 @@ final class DualKernel {
    * <p>q counts the products of the longest column, every addition into one S_a and a few scalings.
    */
   double errorUp(double[] witness) {
-    double y = Rounding.inflate(sumOfY, size + solved + 8L);
+    double trial = Rounding.inflate(sumOfY, size + solved + 8L);
     double rounding = 0;
     double other = 0;
     long operations = 12;
     for (int j = 0; j < frobenius.length; j++) {
       GeneratorTerm term = generator.terms().get(j);
-      TaylorModel coefficient = expansion.coefficient(j);
+      TaylorModel coefficient = expansion().coefficient(j);
       double sum = coefficient.sumUp();
       double rest = coefficient.remainder();
       operations += coefficient.size() + term.matrix().longestColumn();
-      rounding += sum * frobenius[j] * y;
+      rounding += sum * frobenius[j] * trial;
       double gamma = Rounding.gamma(term.matrix().longestColumn() + 2L);
-      double image = frobenius[j] * y;
+      double most = frobenius[j] * trial;
       if (sumOfImages[j] > 0) {
-        image =
-            Math.min(image, Rounding.inflate(sumOfImages[j], size + solved + 8L) + gamma * image);
+        most = Math.min(most, Rounding.inflate(sumOfImages[j], size + solved + 8L) + gamma * most);
       }
-      other += rest == 0 ? 0 : rest * image;
-      other += (sum + rest) * term.radius() * y;
+      other += rest == 0 ? 0 : rest * most;
+      other += (sum + rest) * term.radius() * trial;
     }
     double phiSum = 0;
     for (int a = 0; a < solved; a++) {

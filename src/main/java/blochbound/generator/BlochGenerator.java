@@ -25,14 +25,24 @@ import java.util.function.UnaryOperator;
  * basis {@link BlochBasis}; the first one is fixed by the trace.
  */
 public final class BlochGenerator {
+  /** Degree at which coefficients that are no polynomials are cut on a region. */
+  public static final int SMOOTH_DEGREE = 3;
+
   private final BlochBasis basis;
   private final ParameterSpace space;
   private final List<GeneratorTerm> terms;
+  private final int degree;
 
   private BlochGenerator(BlochBasis basis, ParameterSpace space, List<GeneratorTerm> terms) {
     this.basis = basis;
     this.space = space;
     this.terms = List.copyOf(terms);
+    degree =
+        terms.stream()
+            .map(GeneratorTerm::monomial)
+            .mapToInt(m -> m.isPolynomial() || m.isOne() ? m.degree() : SMOOTH_DEGREE)
+            .max()
+            .orElse(0);
   }
 
   /** Generator of a device, exactly as written. */
@@ -115,6 +125,14 @@ public final class BlochGenerator {
   /** The terms in a fixed order. */
   public List<GeneratorTerm> terms() {
     return terms;
+  }
+
+  /**
+   * Largest degree of a coefficient's expansion on a region: that of the monomial for polynomials,
+   * {@link #SMOOTH_DEGREE} for others; at least 1.
+   */
+  public int degree() {
+    return Math.max(1, degree);
   }
 
   /** Number n = N^2 - 1 of unknowns. */

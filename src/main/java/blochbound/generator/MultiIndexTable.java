@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.concurrent.ConcurrentHashMap;
 
 /**
@@ -59,7 +60,7 @@ public final class MultiIndexTable {
         int[] sum = Arrays.copyOf(factors[a], factors[a].length + 1);
         sum[sum.length - 1] = i;
         Arrays.sort(sum);
-        plus[a][i] = position.get(asList(sum));
+        plus[a][i] = Objects.requireNonNull(position.get(asList(sum)));
       }
     }
   }
@@ -131,6 +132,9 @@ public final class MultiIndexTable {
 
   /** Position of a + b; the sum must be in the table. */
   public int sum(int a, int b) {
+    if (b <= variables) {
+      return b == 0 ? a : plus[a][b - 1];
+    }
     int index = a;
     for (int variable : factors[b]) {
       index = plus[index][variable];

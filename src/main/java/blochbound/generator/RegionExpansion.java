@@ -17,12 +17,9 @@ import java.util.Map;
  * + x * halfWidth, plus a remainder that covers truncation and rounding.
  *
  * <p>Polynomial coefficients are expanded without truncation, so that their remainder is rounding
- * only; smooth ones are cut at {@link #SMOOTH_DEGREE}.
+ * only; smooth ones are cut at {@link BlochGenerator#SMOOTH_DEGREE}.
  */
 public final class RegionExpansion {
-  /** Degree at which smooth coefficients are cut. */
-  public static final int SMOOTH_DEGREE = 3;
-
   private final BlochGenerator generator;
   private final TaylorModel[] coefficients;
 
@@ -31,22 +28,12 @@ public final class RegionExpansion {
     this.coefficients = coefficients;
   }
 
-  /** Largest degree that a coefficient of this generator can have in an expansion. */
-  public static int degree(BlochGenerator generator) {
-    int most = 0;
-    for (GeneratorTerm term : generator.terms()) {
-      Monomial monomial = term.monomial();
-      most = Math.max(most, monomial.isPolynomial() ? monomial.degree() : SMOOTH_DEGREE);
-    }
-    return most;
-  }
-
-  /** Expansion over a region; the table's order must reach {@link #degree}. */
+  /** Expansion over a region; the table's order must reach {@link BlochGenerator#degree}. */
   public static RegionExpansion over(
       BlochGenerator generator, Region region, MultiIndexTable table) {
     ParameterSpace space = generator.space();
     TaylorModel[] parameters = new TaylorModel[space.parameters().size()];
-    int degree = degree(generator);
+    int degree = generator.degree();
     for (int i = 0; i < parameters.length; i++) {
       parameters[i] = parameter(space, i, region, table, degree);
     }
@@ -55,7 +42,7 @@ public final class RegionExpansion {
 
   /** Expansion at a single point whose parameters, in internal units, are known up to intervals. */
   public static RegionExpansion at(BlochGenerator generator, Interval[] point) {
-    MultiIndexTable table = MultiIndexTable.of(0, Math.max(1, degree(generator)));
+    MultiIndexTable table = MultiIndexTable.of(0, generator.degree());
     TaylorModel[] parameters = new TaylorModel[point.length];
     for (int i = 0; i < point.length; i++) {
       parameters[i] = TaylorModel.constant(table, 0, point[i]);

@@ -12,8 +12,8 @@ import java.util.Arrays;
  * #longTimeAverage} then gives the one that an initial state tends to.
  */
 public final class SteadyStateSolver {
-  /** Pivot ratio below which the stationary state counts as not unique to rounding. */
-  public static final double SINGULAR_PIVOT_RATIO = 1e-14;
+  /** Relative pivot below which the stationary state counts as not unique to rounding. */
+  public static final double SINGULAR_PIVOT = 1e-14;
 
   private final BlochGenerator generator;
   private final LuDecomposition lu;
@@ -43,7 +43,7 @@ public final class SteadyStateSolver {
     coefficients = generator.coefficients(parameters);
     generator.assemble(coefficients, lu.rows(), right);
     lu.factor();
-    if (lu.pivotRatio() < SINGULAR_PIVOT_RATIO) {
+    if (lu.smallestRelativePivot() < SINGULAR_PIVOT) {
       return false;
     }
     for (int i = 0; i < right.length; i++) {

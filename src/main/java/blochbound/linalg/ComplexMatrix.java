@@ -52,14 +52,14 @@ public final class ComplexMatrix {
     return new ComplexMatrix(size, size, re, new double[size * size]);
   }
 
-  /** The matrix |row><column| with a single entry one. */
+  /** The matrix {@code |row><column|} with a single entry one. */
   public static ComplexMatrix unit(int size, int row, int column) {
     double[] re = new double[size * size];
     re[row * size + column] = 1;
     return new ComplexMatrix(size, size, re, new double[size * size]);
   }
 
-  /** The outer product |a><b| of two column vectors. */
+  /** The outer product {@code |a><b|} of two column vectors. */
   public static ComplexMatrix outer(ComplexMatrix a, ComplexMatrix b) {
     return a.times(b.adjoint());
   }

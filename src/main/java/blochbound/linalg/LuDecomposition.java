@@ -11,14 +11,15 @@ public final class LuDecomposition {
   private final double[][] rows;
   private final int[] permutation;
   private boolean regular;
-  private double smallestPivot;
-  private double largestPivot;
+  private final double[] rowSize;
+  private double smallestRelativePivot;
 
   /** Workspace for matrices of {@code size} rows. */
   public LuDecomposition(int size) {
     this.n = size;
     this.rows = new double[size][size];
     this.permutation = new int[size];
+    this.rowSize = new double[size];
   }
 
   /** Rows to be filled with the matrix before {@link #factor()}, which overwrites them. */
@@ -37,10 +38,10 @@ public final class LuDecomposition {
   public void factor() {
     for (int i = 0; i < n; i++) {
       permutation[i] = i;
+      rowSize[i] = largestEntry(rows[i]);
     }
     regular = true;
-    smallestPivot = Double.POSITIVE_INFINITY;
-    largestPivot = 0;
+    smallestRelativePivot = 1;
     int k = 0;
     while (k < n && regular) {
       pivot(k);
@@ -67,7 +68,15 @@ public final class LuDecomposition {
       }
     }
     swap(k, best);
-    note(rows[k][k]);
+    note(k);
+  }
+
+  private static double largestEntry(double[] row) {
+    double most = 0;
+    for (double entry : row) {
+      most = Math.max(most, Math.abs(entry));
+    }
+    return most;
   }
 
   /** Multiplier of one column for all rows below, applied to the next column only. */
@@ -90,7 +99,7 @@ public final class LuDecomposition {
     }
     swap(k + 1, best);
     axpy(rows[k + 1], rows[k], rows[k + 1][k], k + 2);
-    note(rows[k + 1][k + 1]);
+    note(k + 1);
   }
 
   private void eliminatePair(int k) {
@@ -140,11 +149,10 @@ public final class LuDecomposition {
     permutation[b] = index;
   }
 
-  private void note(double pivot) {
-    double size = Math.abs(pivot);
+  private void note(int k) {
+    double size = Math.abs(rows[k][k]);
     regular &= size > 0 && Double.isFinite(size);
-    smallestPivot = Math.min(smallestPivot, size);
-    largestPivot = Math.max(largestPivot, size);
+    smallestRelativePivot = Math.min(smallestRelativePivot, size / rowSize[permutation[k]]);
   }
 
   /** Tells whether all pivots were finite and not zero. */
@@ -153,10 +161,11 @@ public final class LuDecomposition {
   }
 
   /**
-   * Ratio of the smallest to the largest pivot: a rough estimate of the distance to singularity.
+   * Smallest ratio of a pivot to the largest entry of its own row before elimination; near the unit
+   * roundoff when the matrix is singular to rounding, whatever the scale of the rows. An estimate.
    */
-  public double pivotRatio() {
-    return regular && n > 0 ? smallestPivot / largestPivot : n == 0 ? 1 : 0;
+  public double smallestRelativePivot() {
+    return regular ? smallestRelativePivot : 0;
   }
 
   /** Writes an approximate solution of A x = right to {@code x}; no allocation. */

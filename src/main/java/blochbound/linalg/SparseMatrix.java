@@ -9,6 +9,7 @@ public final class SparseMatrix {
   private final int rows;
   private final int[] columnStart;
   private final int[] rowIndex;
+  private final int[] columnIndex;
   private final double[] value;
 
   private SparseMatrix(int rows, int[] columnStart, int[] rowIndex, double[] value) {
@@ -16,6 +17,10 @@ public final class SparseMatrix {
     this.columnStart = columnStart;
     this.rowIndex = rowIndex;
     this.value = value;
+    columnIndex = new int[value.length];
+    for (int j = 0; j + 1 < columnStart.length; j++) {
+      Arrays.fill(columnIndex, columnStart[j], columnStart[j + 1], j);
+    }
   }
 
   /** Collects the columns of a sparse matrix from left to right. */
@@ -116,6 +121,13 @@ public final class SparseMatrix {
         sum += value[k] * x[rowIndex[k]];
       }
       out[j] = sum;
+    }
+  }
+
+  /** Adds {@code factor} times the product of the transpose with {@code x} to {@code out}. */
+  public void addTransposeTimes(double factor, double[] x, double[] out) {
+    for (int k = 0; k < value.length; k++) {
+      out[columnIndex[k]] += factor * value[k] * x[rowIndex[k]];
     }
   }
 

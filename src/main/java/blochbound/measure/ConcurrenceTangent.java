@@ -100,7 +100,10 @@ final class ConcurrenceTangent {
     return ComplexMatrix.of(4, 4, re, im);
   }
 
-  /** Z^-1 near V = Z^+ s^-1: with V Z = 1 + F, |V - Z^-1| <= |F| |V| / (1 - |F|). */
+  /**
+   * {@code Z^-1} near {@code V = Z^+ s^-1}: with {@code V Z = 1 + F}, {@code |V - Z^-1| <= |F| |V|
+   * / (1 - |F|)}.
+   */
   private static ComplexBall inverse(ComplexMatrix z, HermitianEigen eigen) {
     double[] reciprocals = eigen.values();
     for (int k = 0; k < 4; k++) {

@@ -30,7 +30,7 @@ final class MixedFidelity extends CertifiedMeasure {
   private static final double SUPPORT_CUT = 1e-14;
 
   /** Least eigenvalues given to B, in the order tried. */
-  private static final double[] FLOORS = {1e-12, 1e-9, 1e-6, 1e-3};
+  private static final double[] FLOORS = {1e-13, 1e-9, 1e-6, 1e-3};
 
   private final ApproximateOperator reference;
   private final ComplexMatrix root;

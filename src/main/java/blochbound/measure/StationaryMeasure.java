@@ -42,9 +42,17 @@ public final class StationaryMeasure {
     return value(z, new double[0]);
   }
 
+  /** Value at parameters in internal units. */
+  public double valueAt(double[] parameters) {
+    return at(parameters, new double[0]);
+  }
+
   /** Value at z; writes the gradient unless the array is empty. */
   public double value(double[] z, double[] gradient) {
-    double[] p = generator.space().parametersAt(z);
+    return at(generator.space().parametersAt(z), gradient);
+  }
+
+  private double at(double[] p, double[] gradient) {
     Arrays.fill(gradient, 0);
     unique = solver.solve(p);
     if (!unique) {
@@ -83,6 +91,18 @@ public final class StationaryMeasure {
     for (int k = 0; k < part.length; k++) {
       whole[embedding[k]] = part[k] * tracedRoot;
     }
+    return whole;
+  }
+
+  /** Bloch coordinates of a matrix on the measure's sites in their own basis. */
+  public double[] reducedCoordinates(Hermitian matrix) {
+    return reducedBasis.coordinates(matrix);
+  }
+
+  /** Bloch coordinates on the whole device of the k-th basis matrix of the measure's sites. */
+  public double[] liftedBasis(int k) {
+    double[] whole = new double[generator.basis().size()];
+    whole[embedding[k]] = tracedRoot;
     return whole;
   }
 

@@ -3,6 +3,7 @@ package blochbound.model;
 import blochbound.interval.Interval;
 import java.util.List;
 import java.util.Map;
+import java.util.NavigableMap;
 import java.util.TreeMap;
 import java.util.stream.Collectors;
 
@@ -16,10 +17,10 @@ public final class Monomial implements Comparable<Monomial> {
   /** The empty product. */
   public static final Monomial ONE = new Monomial(new TreeMap<>());
 
-  private final TreeMap<Atom, Integer> powers;
+  private final NavigableMap<Atom, Integer> powers;
   private final String key;
 
-  private Monomial(TreeMap<Atom, Integer> powers) {
+  private Monomial(NavigableMap<Atom, Integer> powers) {
     this.powers = powers;
     this.key =
         powers.entrySet().stream()

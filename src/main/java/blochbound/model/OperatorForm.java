@@ -12,9 +12,9 @@ import java.util.TreeMap;
  */
 public final class OperatorForm {
   private final int dimension;
-  private final TreeMap<Monomial, ComplexBall> terms;
+  private final SortedMap<Monomial, ComplexBall> terms;
 
-  private OperatorForm(int dimension, TreeMap<Monomial, ComplexBall> terms) {
+  private OperatorForm(int dimension, SortedMap<Monomial, ComplexBall> terms) {
     this.dimension = dimension;
     this.terms = terms;
   }

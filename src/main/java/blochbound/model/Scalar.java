@@ -10,6 +10,7 @@ import java.util.ArrayList;
 import java.util.Collections;
 import java.util.List;
 import java.util.Map;
+import java.util.NavigableMap;
 import java.util.Optional;
 import java.util.SortedMap;
 import java.util.TreeMap;
@@ -29,9 +30,9 @@ public final class Scalar {
   /** One. */
   public static final Scalar ONE = constant(Coefficient.ONE);
 
-  private final TreeMap<Monomial, Coefficient> terms;
+  private final NavigableMap<Monomial, Coefficient> terms;
 
-  private Scalar(TreeMap<Monomial, Coefficient> terms) {
+  private Scalar(NavigableMap<Monomial, Coefficient> terms) {
     this.terms = terms;
   }
 

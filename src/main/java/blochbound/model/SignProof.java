@@ -43,7 +43,16 @@ public final class SignProof {
      * @param coordinates coordinates z where it fails, or near which no proof was found
      * @param value value of the expression there, rounded
      */
-    record NotProved(double[] coordinates, double value) implements Outcome {}
+    record NotProved(List<Double> coordinates, double value) implements Outcome {
+      /** Copies the list. */
+      public NotProved {
+        coordinates = List.copyOf(coordinates);
+      }
+
+      static NotProved at(double[] coordinates, double value) {
+        return new NotProved(java.util.Arrays.stream(coordinates).boxed().toList(), value);
+      }
+    }
   }
 
   private SignProof() {}
@@ -86,10 +95,9 @@ public final class SignProof {
   private static Outcome decide(ExactNumber centre, ExactNumber[] reach, Norm norm, Claim claim) {
     int side = claim == Claim.NONNEGATIVE ? 1 : centre.signum();
     int compared = compareWithReach(centre.ratio().abs(), reach, norm);
-    boolean holds =
-        centre.signum() == side && side != 0
-            ? compared > 0 || (compared == 0 && claim == Claim.NONNEGATIVE)
-            : claim == Claim.NONNEGATIVE && centre.signum() == 0 && compared == 0;
+    boolean mayTouchZero = claim == Claim.NONNEGATIVE;
+    boolean onSide = centre.signum() == side || (centre.signum() == 0 && mayTouchZero);
+    boolean holds = side != 0 && onSide && (compared > 0 || (compared == 0 && mayTouchZero));
     return holds ? new Outcome.Proved(side) : failure(centre, reach, norm, side == 0 ? 1 : side);
   }
 
@@ -130,7 +138,7 @@ public final class SignProof {
           };
       value += r[j] * z[j];
     }
-    return new Outcome.NotProved(z, value);
+    return Outcome.NotProved.at(z, value);
   }
 
   private static Outcome byBisection(Scalar expression, ParameterSpace space, Claim claim) {
@@ -158,7 +166,7 @@ public final class SignProof {
       double value = expression.value(space.parametersAt(centre));
       boolean inside = !outside(new double[][] {centre, centre}, space.norm());
       if (count >= MOST_BOXES || m == 0 || (inside && !(sign * value > 0))) {
-        return new Outcome.NotProved(centre, value);
+        return Outcome.NotProved.at(centre, value);
       }
       open.addAll(halves(box, expression, space));
     }

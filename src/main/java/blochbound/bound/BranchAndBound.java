@@ -1,0 +1,278 @@
+package blochbound.bound;
+
+import blochbound.bound.BranchOutcome.Reason;
+import blochbound.bound.CellBound.Cell;
+import blochbound.certificate.RegionCertificate;
+import blochbound.model.Ball.Norm;
+import blochbound.model.Region;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.PriorityQueue;
+import java.util.concurrent.atomic.AtomicBoolean;
+import java.util.function.Supplier;
+import org.jspecify.annotations.Nullable;
+
+/**
+ * Best-first branch and bound for the minimum of a function over the tolerance ball.
+ *
+ * <p>The region with the smallest bound is halved along the coordinate that the cell bound names;
+ * halves without a part in the ball are dropped, others are drawn together around it. All regions
+ * that were not dropped stay in the queue, so that the smallest bound in it, together with those
+ * being worked on, holds for the whole ball at any time. With one thread the run is deterministic.
+ */
+public final class BranchAndBound {
+  private static final double SMALLEST_HALF_WIDTH = 0x1p-40;
+
+  /** Relative width at which a bracket is closed to rounding, whatever was asked. */
+  private static final double CLOSED = 1e-10;
+
+  private record Node(Region region, Cell cell, double certifiedLower, long number) {}
+
+  private final Supplier<CellBound> bounds;
+  private final BallConstraint ball;
+  private final BranchOptions options;
+  private final AtomicBoolean stop;
+  private final long started = System.nanoTime();
+  private final PriorityQueue<Node> open =
+      new PriorityQueue<>(
+          (a, b) ->
+              a.certifiedLower != b.certifiedLower
+                  ? Double.compare(a.certifiedLower, b.certifiedLower)
+                  : Long.compare(a.number, b.number));
+  private final List<Node> unsplittable = new ArrayList<>();
+  private final List<Node> working = new ArrayList<>();
+  private double attained;
+  private double[] point;
+  private long regions;
+  private Optional<Reason> ended = Optional.empty();
+  private Optional<RuntimeException> failure = Optional.empty();
+
+  private BranchAndBound(
+      Supplier<CellBound> bounds, Norm norm, BranchOptions options, AtomicBoolean stop) {
+    this.bounds = bounds;
+    this.ball = new BallConstraint(norm);
+    this.options = options;
+    this.stop = stop;
+    attained = Double.POSITIVE_INFINITY;
+    point = new double[0];
+  }
+
+  /**
+   * Brackets the minimum.
+   *
+   * @param bounds makes the cell bound of each worker thread
+   * @param coordinates number m of coordinates
+   * @param norm norm of the unit ball in those coordinates
+   * @param options when to end
+   * @param start a point of the ball with its value, found before, or an infinite value
+   * @param stop set from outside to end early
+   */
+  public static BranchOutcome minimise(
+      Supplier<CellBound> bounds,
+      int coordinates,
+      Norm norm,
+      BranchOptions options,
+      Start start,
+      AtomicBoolean stop) {
+    BranchAndBound run = new BranchAndBound(bounds, norm, options, stop);
+    run.attained = start.value;
+    run.point = start.point;
+    return run.run(Region.whole(coordinates));
+  }
+
+  /**
+   * A point found before.
+   *
+   * @param point coordinates; empty for none
+   * @param value value there; infinite for none
+   */
+  public record Start(double[] point, double value) {
+    /** No point. */
+    public static Start none() {
+      return new Start(new double[0], Double.POSITIVE_INFINITY);
+    }
+  }
+
+  private BranchOutcome run(Region whole) {
+    CellBound first = bounds.get();
+    Cell root = first.bound(whole, enough());
+    accept(whole, root, Double.NEGATIVE_INFINITY);
+    List<Thread> helpers = new ArrayList<>();
+    for (int k = 1; k < options.threads() && !finished(); k++) {
+      Thread helper = new Thread(() -> work(bounds.get()), "bound-" + k);
+      helper.setDaemon(true);
+      helpers.add(helper);
+      helper.start();
+    }
+    work(first);
+    for (Thread helper : helpers) {
+      joinUninterruptibly(helper);
+    }
+    failure.ifPresent(
+        e -> {
+          throw e;
+        });
+    return outcome();
+  }
+
+  private static void joinUninterruptibly(Thread thread) {
+    boolean interrupted = false;
+    while (thread.isAlive()) {
+      try {
+        thread.join();
+      } catch (InterruptedException e) {
+        interrupted = true;
+      }
+    }
+    if (interrupted) {
+      Thread.currentThread().interrupt();
+    }
+  }
+
+  private void work(CellBound bound) {
+    try {
+      Node node = take();
+      while (node != null) {
+        List<Region> halves = halves(node);
+        List<Cell> cells = new ArrayList<>();
+        for (Region half : halves) {
+          cells.add(bound.bound(half, enough()));
+        }
+        give(node, halves, cells);
+        node = take();
+      }
+    } catch (RuntimeException e) {
+      fail(e);
+    }
+  }
+
+  private List<Region> halves(Node node) {
+    List<Region> halves = new ArrayList<>();
+    for (int side = -1; side <= 1; side += 2) {
+      ball.tighten(node.region.half(node.cell.split(), side)).ifPresent(halves::add);
+    }
+    return halves;
+  }
+
+  /** The next region to split, or null when the work has ended. */
+  private synchronized @Nullable Node take() {
+    while (true) {
+      if (finished()) {
+        notifyAll();
+        return null;
+      }
+      Node next = open.poll();
+      if (next != null && isSplittable(next)) {
+        working.add(next);
+        return next;
+      }
+      if (next != null) {
+        unsplittable.add(next);
+        continue;
+      }
+      if (working.isEmpty()) {
+        ended = Optional.of(Reason.RESOLUTION);
+        continue;
+      }
+      try {
+        wait(50);
+      } catch (InterruptedException e) {
+        stop.set(true);
+      }
+    }
+  }
+
+  private static boolean isSplittable(Node node) {
+    return node.cell.split() >= 0 && node.region.halfWidth(node.cell.split()) > SMALLEST_HALF_WIDTH;
+  }
+
+  private synchronized void give(Node parent, List<Region> halves, List<Cell> cells) {
+    working.remove(parent);
+    for (int k = 0; k < halves.size(); k++) {
+      accept(halves.get(k), cells.get(k), parent.certifiedLower);
+    }
+    notifyAll();
+  }
+
+  private synchronized void accept(Region region, Cell cell, double parentLower) {
+    regions++;
+    // What holds on the parent holds on its halves.
+    double lower = Math.max(parentLower, cell.certifiedLower());
+    open.add(new Node(region, cell, lower, regions));
+    if (cell.attained() < attained) {
+      attained = cell.attained();
+      point = cell.candidate();
+    }
+  }
+
+  private synchronized void fail(RuntimeException e) {
+    failure = failure.or(() -> Optional.of(e));
+    ended = Optional.of(Reason.STOPPED);
+    notifyAll();
+  }
+
+  private synchronized double enough() {
+    double width = allowedGap();
+    return Double.isInfinite(width) ? options.limit() : attained - width;
+  }
+
+  private double allowedGap() {
+    double loss = options.reference() - attained;
+    double relative = options.relativeGap() > 0 && loss > 0 ? options.relativeGap() * loss : 0;
+    boolean onlyRelative = options.relativeGap() > 0 && Double.isInfinite(options.gap());
+    return onlyRelative ? relative : Math.max(options.gap(), relative);
+  }
+
+  /** Decides whether the work has ended, and why. */
+  private synchronized boolean finished() {
+    if (ended.isPresent()) {
+      return true;
+    }
+    double lower = certifiedLower();
+    double width = allowedGap();
+    boolean decideOnly = Double.isInfinite(width);
+    if (stop.get()) {
+      ended = Optional.of(Reason.STOPPED);
+    } else if (decideOnly && lower >= options.limit()) {
+      ended = Optional.of(Reason.CERTIFIED);
+    } else if (decideOnly && attained < options.limit() - 10 * CLOSED * (1 + Math.abs(attained))) {
+      ended = Optional.of(Reason.REFUTED);
+    } else if (attained - lower <= (decideOnly ? CLOSED * (1 + Math.abs(attained)) : width)) {
+      ended = Optional.of(Reason.NARROW);
+    } else if (System.nanoTime() - started > options.time().toNanos()) {
+      ended = Optional.of(Reason.TIME);
+    } else if (regions >= options.regions()) {
+      ended = Optional.of(Reason.REGIONS);
+    }
+    return ended.isPresent();
+  }
+
+  private double certifiedLower() {
+    double lower = open.isEmpty() ? Double.POSITIVE_INFINITY : open.peek().certifiedLower;
+    for (Node node : working) {
+      lower = Math.min(lower, node.certifiedLower);
+    }
+    for (Node node : unsplittable) {
+      lower = Math.min(lower, node.certifiedLower);
+    }
+    return lower;
+  }
+
+  private BranchOutcome outcome() {
+    List<RegionCertificate> certificates = new ArrayList<>();
+    for (List<Node> nodes : List.of(new ArrayList<>(open), working, unsplittable)) {
+      for (Node node : nodes) {
+        node.cell.certificate().ifPresent(certificates::add);
+      }
+    }
+    return new BranchOutcome(
+        certifiedLower(),
+        attained,
+        point.clone(),
+        regions,
+        (System.nanoTime() - started) * 1e-9,
+        ended.orElse(Reason.STOPPED),
+        certificates);
+  }
+}
