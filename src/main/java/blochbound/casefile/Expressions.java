@@ -8,6 +8,7 @@ import blochbound.linalg.ComplexBall;
 import blochbound.model.Monomial;
 import blochbound.model.OperatorForm;
 import blochbound.model.Scalar;
+import java.util.Objects;
 
 /** Evaluates texts of a case file as real numbers, operators or constant matrices. */
 final class Expressions {
@@ -70,7 +71,7 @@ final class Expressions {
       throw passage.fault(
           what + " must not depend on parameters, here on " + part(value.form().terms().lastKey()));
     }
-    return value.form().terms().get(Monomial.ONE);
+    return Objects.requireNonNull(value.form().terms().get(Monomial.ONE));
   }
 
   /** Checks a dimension; a zero agrees with all. */

@@ -15,9 +15,9 @@ import java.util.Map;
 /**
  * Standard operators, transitions and kets of the sites as matrices with proved error bounds.
  *
- * <p>The first label of a two-level site is the +1 eigenstate of Z; Y = -i |first><second| + h.c.;
- * lower takes level k to level k - 1 with the weight sqrt(k), so that lower = (X + iY)/2 on two
- * levels; number = diag(0, 1, 2, ...).
+ * <p>The first label of a two-level site is the +1 eigenstate of Z; Y = -i {@code |first><second|}
+ * + h.c.; lower takes level k to level k - 1 with the weight sqrt(k), so that lower = (X + iY)/2 on
+ * two levels; number = diag(0, 1, 2, ...).
  */
 final class LocalOperators {
   private final HilbertSpace space;
@@ -130,7 +130,7 @@ final class LocalOperators {
     return ComplexBall.exact(ComplexMatrix.real(entries));
   }
 
-  /** The transition |a><b| of one site on all sites. */
+  /** The transition {@code |a><b|} of one site on all sites. */
   ComplexBall transition(int site, int a, int b) {
     int levels = space.sites().get(site).dimension();
     return known.computeIfAbsent(
@@ -138,7 +138,7 @@ final class LocalOperators {
         k -> space.lift(site, ComplexBall.exact(ComplexMatrix.unit(levels, a, b))));
   }
 
-  /** The transition |a><b| between basis states of all sites. */
+  /** The transition {@code |a><b|} between basis states of all sites. */
   ComplexBall transition(int a, int b) {
     return ComplexBall.exact(ComplexMatrix.unit(dimension(), a, b));
   }

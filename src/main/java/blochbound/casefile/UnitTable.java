@@ -41,7 +41,7 @@ final class UnitTable {
     if (isDimensionless()) {
       return;
     }
-    int internal = TIMES.get(timeUnit);
+    int internal = java.util.Objects.requireNonNull(TIMES.get(timeUnit), timeUnit);
     ExactNumber turn = ExactNumber.of(2).times(ExactNumber.PI);
     TIMES.forEach(
         (name, exponent) -> {
