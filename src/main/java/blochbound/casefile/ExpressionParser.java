@@ -72,6 +72,7 @@ final class ExpressionParser {
       Token start = peek();
       Expression factor = unary();
       if (join == Join.DIVIDED_BY
+          && start.kind() == Kind.NUMBER
           && factor instanceof Expression.Literal n
           && n.unit().symbol().contains("/")) {
         throw passage.fault(
@@ -108,12 +109,14 @@ final class ExpressionParser {
   }
 
   private Expression power() {
+    Token start = peek();
     Expression base = primary();
     if (!peek().is("^")) {
       return base;
     }
     Token caret = take();
-    if (base instanceof Expression.Literal n && !n.unit().symbol().isEmpty()) {
+    boolean inBrackets = start.is("(");
+    if (!inBrackets && base instanceof Expression.Literal n && !n.unit().symbol().isEmpty()) {
       throw passage.fault(
           caret.at(), "a power of a number with a unit needs brackets, such as (3 kHz)^2");
     }

@@ -71,7 +71,7 @@ final class Fields {
     return node(key)
         .orElseThrow(
             () ->
-                misspelt.contains(key)
+                isMisspelt(key)
                     ? FaultSignal.following()
                     : fault("`" + key + "` is missing in " + what));
   }
@@ -79,6 +79,11 @@ final class Fields {
   /** The text of a key that must be there. */
   YamlScalar neededScalar(String key, String expected) {
     return needed(key).asScalar(expected);
+  }
+
+  /** Tells whether an unknown key was probably meant to be this one. */
+  boolean isMisspelt(String key) {
+    return misspelt.contains(key);
   }
 
   /** A fault of the whole mapping. */

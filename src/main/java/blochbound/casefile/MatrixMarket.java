@@ -184,8 +184,9 @@ final class MatrixMarket {
       return;
     }
     int to = column * size + row;
-    re[to] = skew ? -re[from] : re[from];
-    im[to] = skew || hermitian ? -im[from] : im[from];
+    // Adding zero keeps negative zeros out.
+    re[to] = 0.0 + (skew ? -re[from] : re[from]);
+    im[to] = 0.0 + (skew || hermitian ? -im[from] : im[from]);
     errors[to] = errors[from];
     errors[size * size + to] = errors[size * size + from];
   }

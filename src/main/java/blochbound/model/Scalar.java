@@ -100,14 +100,17 @@ public final class Scalar {
 
   /** Product; even powers of a square root become powers of its argument. */
   public Scalar times(Scalar other) {
-    Scalar sum = ZERO;
+    TreeMap<Monomial, Coefficient> sum = new TreeMap<>();
     for (Map.Entry<Monomial, Coefficient> a : terms.entrySet()) {
       for (Map.Entry<Monomial, Coefficient> b : other.terms.entrySet()) {
-        sum =
-            sum.plus(normal(a.getKey().times(b.getKey())).scaled(a.getValue().times(b.getValue())));
+        normal(a.getKey().times(b.getKey()))
+            .scaled(a.getValue().times(b.getValue()))
+            .terms
+            .forEach((m, c) -> sum.merge(m, c, Coefficient::plus));
       }
     }
-    return sum;
+    sum.values().removeIf(Coefficient::isZero);
+    return new Scalar(sum);
   }
 
   private Scalar scaled(Coefficient factor) {

@@ -164,6 +164,14 @@ class ExpressionFaultTest {
   }
 
   @Test
+  void theFormsThatFaultsAdviseAreRead() throws CaseFaultException {
+    String sum =
+        "g * X@a + (3 kHz)^2 * 1 us + g^2 / (3 /us) + (g / 3) * 2 us * 1 /us + (1 + adj(1)) * g"
+            + " + 3/us * Z@a + 0.1 1/us + 2 rad / us + |g,e><g,e| * g + |e><e|@b * g";
+    CaseText.pair().set("hamiltonian", "\"" + sum + "\"").read();
+  }
+
+  @Test
   void standardOperatorsFitTheirSite() {
     CaseText.dimensionless()
         .set("sites", "{a: {levels: 3}, b: {levels: 2}}")
