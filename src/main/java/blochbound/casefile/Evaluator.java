@@ -43,7 +43,7 @@ final class Evaluator {
     return expression.evaluate(new Evaluator(scope, passage));
   }
 
-  Value number(Expression.Number node) {
+  Value number(Expression.Literal node) {
     ExactNumber value = ExactNumber.of(node.value()).times(node.unit().factor());
     return checked(Numeric.real(Scalar.constant(value), Dimension.of(node.unit())), node.at());
   }

@@ -21,7 +21,7 @@ sealed interface Expression {
    * @param unit its unit, perhaps none
    * @param at its offset
    */
-  record Number(BigDecimal value, Unit unit, int at) implements Expression {
+  record Literal(BigDecimal value, Unit unit, int at) implements Expression {
     @Override
     public Value evaluate(Evaluator evaluator) {
       return evaluator.number(this);

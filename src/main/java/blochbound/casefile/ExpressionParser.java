@@ -72,7 +72,7 @@ final class ExpressionParser {
       Token start = peek();
       Expression factor = unary();
       if (join == Join.DIVIDED_BY
-          && factor instanceof Expression.Number n
+          && factor instanceof Expression.Literal n
           && n.unit().symbol().contains("/")) {
         throw passage.fault(
             start.at(),
@@ -113,7 +113,7 @@ final class ExpressionParser {
       return base;
     }
     Token caret = take();
-    if (base instanceof Expression.Number n && !n.unit().symbol().isEmpty()) {
+    if (base instanceof Expression.Literal n && !n.unit().symbol().isEmpty()) {
       throw passage.fault(
           caret.at(), "a power of a number with a unit needs brackets, such as (3 kHz)^2");
     }
@@ -274,7 +274,7 @@ final class ExpressionParser {
       for (int k = 0; k < words; k++) {
         symbol.append(take().text());
       }
-      return new Expression.Number(
+      return new Expression.Literal(
           DecimalText.value(number.text()),
           units
               .find(symbol.toString())

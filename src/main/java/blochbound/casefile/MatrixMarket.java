@@ -67,7 +67,7 @@ final class MatrixMarket {
 
   /** Reads the first line and returns the layout. */
   private String header() {
-    String[] words = lines[line++].trim().toLowerCase(Locale.ROOT).split("\\s+");
+    String[] words = lines[line++].trim().toLowerCase(Locale.ROOT).split("\\s+", -1);
     boolean known =
         words.length == 5
             && words[0].equals("%%matrixmarket")
@@ -214,7 +214,7 @@ final class MatrixMarket {
     while (line < lines.length) {
       String text = lines[line++].trim();
       if (!text.isEmpty() && !text.startsWith("%")) {
-        return Optional.of(text.split("\\s+"));
+        return Optional.of(text.split("\\s+", -1));
       }
     }
     return Optional.empty();

@@ -76,31 +76,31 @@ public record BallProjection(Norm norm) {
   private static void shrinkTowardsZero(double[] z) {
     double[] sizes = new double[z.length];
     Arrays.setAll(sizes, j -> Math.abs(z[j]));
-    double threshold = simplexThreshold(sizes);
-    Arrays.setAll(z, j -> Math.copySign(Math.max(0, sizes[j] - threshold), z[j]));
+    projectOntoSimplex(sizes);
+    Arrays.setAll(z, j -> Math.copySign(sizes[j], z[j]));
   }
 
-  /** Replaces v by the nearest vector with nonnegative entries of sum 1. */
+  /**
+   * Replaces v by the nearest vector with nonnegative entries of sum 1: the positive parts of v -
+   * theta. Entries are taken relative to the largest, so that large ones do not swallow the 1.
+   */
   static void projectOntoSimplex(double[] v) {
-    double threshold = simplexThreshold(v);
-    Arrays.setAll(v, j -> Math.max(0, v[j] - threshold));
-  }
-
-  /** The theta for which the positive parts of v - theta have the sum 1. */
-  private static double simplexThreshold(double[] v) {
+    double largest = Arrays.stream(v).max().orElse(0);
+    Arrays.setAll(v, j -> v[j] - largest);
     double[] sorted = v.clone();
     Arrays.sort(sorted);
     double sum = 0;
-    double threshold = 0;
+    double theta = 0;
     for (int count = 1; count <= sorted.length; count++) {
       double entry = sorted[sorted.length - count];
       sum += entry;
       double candidate = (sum - 1) / count;
       if (entry > candidate) {
-        threshold = candidate;
+        theta = candidate;
       }
     }
-    return threshold;
+    double threshold = theta;
+    Arrays.setAll(v, j -> Math.max(0, v[j] - threshold));
   }
 
   /** A point drawn uniformly from the ball. */

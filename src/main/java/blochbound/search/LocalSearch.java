@@ -17,6 +17,11 @@ record LocalSearch(BallProjection ball) {
   private static final int MEMORY = 6;
   private static final int MOST_ITERATIONS = 2000;
   private static final int MOST_BACKTRACKS = 12;
+  private static final int WINDOW = 12;
+
+  /** Trials for each accepted step, over a window, beyond which a kink is suspected. */
+  private static final int MOST_TRIALS = 3;
+
   private static final double SUFFICIENT_DECREASE = 1e-4;
 
   /** Steps below this length, in coordinates of the unit ball, count as none. */
@@ -25,20 +30,23 @@ record LocalSearch(BallProjection ball) {
   /** Share of the first gradient below which a projected gradient counts as zero. */
   private static final double FLAT = 1e-6;
 
-  /** Decrease over a full memory, as a share of the values' size, that counts as none. */
+  /** Slopes below this one count as zero, so that its inverse is a number. */
+  private static final double SMALLEST_SLOPE = 1e-300;
+
+  /** Decrease over a window, as a share of the values' size, that counts as none. */
   private static final double NO_PROGRESS = 1e-14;
 
   /** Runs from the start, moved into the ball; the evaluator holds the best point. */
   void run(Evaluator evaluator, double[] start) {
     Iterate at = Iterate.at(evaluator, ball.project(start));
-    if (!Double.isFinite(at.value()) || Iterate.largest(at.gradient()) == 0) {
+    double slope = Iterate.largest(at.gradient());
+    if (!Double.isFinite(at.value()) || slope < SMALLEST_SLOPE) {
       return;
     }
-    double slope = Iterate.largest(at.gradient());
     double step = 1 / slope;
     double[] recent = new double[MEMORY];
     Arrays.fill(recent, at.value());
-    double progressMark = at.value();
+    Progress progress = new Progress(evaluator.count(), at.value());
     for (int i = 1; i <= MOST_ITERATIONS && !evaluator.isExhausted(); i++) {
       Iterate next = advance(evaluator, at, step, Arrays.stream(recent).max().orElseThrow());
       if (next == at) {
@@ -48,16 +56,25 @@ record LocalSearch(BallProjection ball) {
       slope = Math.max(slope, Iterate.largest(next.gradient()));
       at = next;
       recent[i % MEMORY] = at.value();
-      if (i % (2 * MEMORY) == 0) {
-        double best = evaluator.bestValue();
-        if (progressMark - best <= NO_PROGRESS * Math.abs(best)) {
+      if (i % WINDOW == 0) {
+        if (progress.isPoorUntil(evaluator)) {
           break;
         }
-        progressMark = best;
+        progress = new Progress(evaluator.count(), evaluator.bestValue());
       }
     }
     if (!isStationary(at, slope)) {
       new BundleDescent(ball).run(evaluator, at);
+    }
+  }
+
+  /** Where a window of iterations began. */
+  private record Progress(int count, double best) {
+    /** Whether nothing was gained, or only by many short steps as at a kink. */
+    boolean isPoorUntil(Evaluator evaluator) {
+      double gain = best - evaluator.bestValue();
+      return gain <= NO_PROGRESS * Math.abs(evaluator.bestValue())
+          || evaluator.count() - count > MOST_TRIALS * WINDOW;
     }
   }
 
@@ -96,8 +113,7 @@ record LocalSearch(BallProjection ball) {
     double[] s = Iterate.difference(next.x(), at.x());
     double[] y = Iterate.difference(next.gradient(), at.gradient());
     double curvature = Iterate.inner(s, y);
-    double size = Iterate.largest(next.gradient());
-    double longest = size == 0 ? 1 : 1e3 / size;
+    double longest = 1e3 / Math.max(SMALLEST_SLOPE, Iterate.largest(next.gradient()));
     if (!(curvature > 0)) {
       return longest;
     }
