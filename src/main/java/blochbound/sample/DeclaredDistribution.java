@@ -1,6 +1,8 @@
 package blochbound.sample;
 
+import blochbound.model.Parameter;
 import blochbound.model.ParameterSpace;
+import java.util.List;
 import java.util.stream.IntStream;
 
 /**
@@ -22,15 +24,27 @@ final class DeclaredDistribution {
   private final double[][] normalFactor;
 
   DeclaredDistribution(ParameterSpace space) {
-    int m = space.coordinates();
-    marginals = IntStream.range(0, m).mapToObj(j -> Marginal.of(space, j)).toArray(Marginal[]::new);
     isCorrelated = !space.isUncorrelated();
     factor = isCorrelated ? correlationFactor(space) : new double[0][];
+    marginals = marginals(space);
     normal =
-        IntStream.range(0, isCorrelated ? m : 0)
+        IntStream.range(0, isCorrelated ? marginals.length : 0)
             .filter(j -> marginals[j] instanceof Marginal.Normal)
             .toArray();
     normalFactor = normalFactor();
+  }
+
+  private Marginal[] marginals(ParameterSpace space) {
+    List<Parameter> all = space.parameters();
+    double[] low = space.coordinatesOf(all.stream().map(Parameter::lower).toList());
+    double[] nominal = space.coordinatesOf(all.stream().map(Parameter::nominal).toList());
+    double[] high = space.coordinatesOf(all.stream().map(Parameter::upper).toList());
+    Marginal[] made = new Marginal[low.length];
+    for (int j = 0; j < made.length; j++) {
+      Parameter p = all.get(space.parameterOf(j));
+      made[j] = Marginal.of(p, share(low, j), share(nominal, j), share(high, j));
+    }
+    return made;
   }
 
   /** Rows of the slopes at unit length: a Cholesky factor of the correlation matrix. */

@@ -1,11 +1,7 @@
 package blochbound.sample;
 
-import blochbound.interval.ExactNumber;
 import blochbound.model.Distribution;
 import blochbound.model.Parameter;
-import blochbound.model.ParameterSpace;
-import java.math.BigDecimal;
-import org.apache.commons.math3.fraction.BigFraction;
 import org.apache.commons.math3.special.Erf;
 
 /**
@@ -28,26 +24,21 @@ interface Marginal {
   /** Largest density, which is reached at the nominal value. */
   double peak();
 
-  /** The marginal of the parameter that belongs to a coordinate. */
-  static Marginal of(ParameterSpace space, int coordinate) {
-    int index = space.parameterOf(coordinate);
-    Parameter p = space.parameters().get(index);
-    BigFraction centre = space.centreFraction(index);
-    BigFraction width = space.halfWidth(index);
-    double low = share(p.lower(), centre, width);
-    double nominal = share(p.nominal(), centre, width);
-    double high = share(p.upper(), centre, width);
-    Distribution distribution = p.distribution();
-    if (distribution instanceof Distribution.Normal normal) {
-      return Normal.of(nominal, normal.sigma() / width.doubleValue());
+  /**
+   * The marginal of a parameter.
+   *
+   * @param low share of the lower end of its tolerance range
+   * @param nominal share of its nominal value
+   * @param high share of the upper end
+   */
+  static Marginal of(Parameter p, double low, double nominal, double high) {
+    if (p.distribution() instanceof Distribution.Normal normal) {
+      double perUnit = (high - low) / p.upper().subtract(p.lower()).doubleValue();
+      return Normal.of(nominal, normal.sigma() * perUnit);
     }
-    return distribution instanceof Distribution.Triangular
+    return p.distribution() instanceof Distribution.Triangular
         ? new Triangular(low, nominal, high)
         : new Uniform(low, high);
-  }
-
-  private static double share(BigDecimal value, BigFraction centre, BigFraction width) {
-    return ExactNumber.of(value).ratio().subtract(centre).divide(width).doubleValue();
   }
 
   private static double clamp(double s) {

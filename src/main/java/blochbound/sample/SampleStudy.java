@@ -82,7 +82,10 @@ public final class SampleStudy {
       all.sort(Comparator.comparingInt(BatchEvaluation.Values::index));
       return all;
     } catch (ExecutionException e) {
-      throw new IllegalStateException("sampling failed: " + e.getCause().getMessage(), e);
+      if (e.getCause() instanceof RuntimeException failure) {
+        throw failure;
+      }
+      throw new IllegalStateException("sampling failed", e);
     } catch (InterruptedException e) {
       Thread.currentThread().interrupt();
       throw new IllegalStateException("sampling was interrupted", e);
