@@ -81,7 +81,6 @@ final class CertifyCommand implements Callable<Integer> {
     }
   }
 
-  @SuppressWarnings("try") // the progress line only has to be taken away at the end
   private CertificationResult run(DesignCase designCase, CertificationOptions options) {
     Attended attended = output.isQuiet() ? Attended.NO : session.attended();
     Progress progress = Progress.show(attended, session.err(), designCase.title());

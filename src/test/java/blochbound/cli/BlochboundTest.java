@@ -318,6 +318,6 @@ class BlochboundTest {
         Blochbound.run(
             new String[] {"certify", missing}, InProcess.stream(out), InProcess.stream(err));
     assertEquals(2, code);
-    assertTrue(text(err.toByteArray()).startsWith(missing + ":1:1: "), err.toString());
+    assertTrue(text(err.toByteArray()).startsWith(missing + ":1:1: "), text(err.toByteArray()));
   }
 }

@@ -21,6 +21,10 @@ class ResultFileTest {
 
   @TempDir private Path directory = Path.of("");
 
+  private static String message(Exception refusal) {
+    return String.valueOf(refusal.getMessage());
+  }
+
   private List<Path> entries() throws IOException {
     try (Stream<Path> entries = Files.list(directory)) {
       return entries.toList();
@@ -49,14 +53,14 @@ class ResultFileTest {
   void missingDirectoryIsSaid() {
     ResultFile result = new ResultFile(directory.resolve("no").resolve("result.json"));
     OutputException refusal = assertThrows(OutputException.class, result::check);
-    assertTrue(refusal.getMessage().endsWith("its directory does not exist"), refusal.getMessage());
+    assertTrue(message(refusal).endsWith("its directory does not exist"), message(refusal));
     assertThrows(OutputException.class, () -> result.write(CONTENT));
   }
 
   @Test
   void directoryIsNoFile() {
     OutputException refusal = assertThrows(OutputException.class, new ResultFile(directory)::check);
-    assertTrue(refusal.getMessage().endsWith("it is a directory"), refusal.getMessage());
+    assertTrue(message(refusal).endsWith("it is a directory"), message(refusal));
   }
 
   @Test
@@ -64,7 +68,7 @@ class ResultFileTest {
     Path file = Files.writeString(directory.resolve("file"), "x");
     ResultFile result = new ResultFile(file.resolve("result.json"));
     OutputException refusal = assertThrows(OutputException.class, result::check);
-    assertFalse(refusal.getMessage().contains("null"), refusal.getMessage());
+    assertFalse(message(refusal).contains("null"), message(refusal));
   }
 
   @Test
@@ -93,6 +97,6 @@ class ResultFileTest {
     Assumptions.assumeTrue(Files.exists(device));
     OutputException refusal =
         assertThrows(OutputException.class, () -> new ResultFile(device).write(CONTENT));
-    assertTrue(refusal.getMessage().startsWith("cannot write /dev/full: "), refusal.getMessage());
+    assertTrue(message(refusal).startsWith("cannot write /dev/full: "), message(refusal));
   }
 }

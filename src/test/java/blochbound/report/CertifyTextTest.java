@@ -24,6 +24,8 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 
 class CertifyTextTest {
+  private static final List<Verdict> VERDICTS = List.of(Verdict.values());
+
   // [invariant] the values of the hand-made record; margins 0.9142 - 0.90 and 0.915139 - 0.90
   private static final String ONE_REQUIREMENT =
       """
@@ -139,8 +141,11 @@ class CertifyTextTest {
                 r.interrupted()));
     assertTrue(
         text.contains(
-            "\nsteady state: not unique. Without pump and decay every state is stationary.\n"
-                + "  at pump = 0.0 /us, decay = 0 /us, shift = 0 /us\n"),
+            """
+
+            steady state: not unique. Without pump and decay every state is stationary.
+              at pump = 0.0 /us, decay = 0 /us, shift = 0 /us
+            """),
         text);
   }
 
@@ -176,7 +181,7 @@ class CertifyTextTest {
                     List.of(BigDecimal.ONE, new BigDecimal("1e-200"), new BigDecimal("-7.5"))),
                 name(random) + " " + name(random))),
         results,
-        Verdict.values()[random.nextInt(3)],
+        VERDICTS.get(random.nextInt(3)),
         random.nextBoolean());
   }
 
@@ -190,7 +195,7 @@ class CertifyTextTest {
             value(random),
             value(random),
             value(random),
-            Verdict.values()[random.nextInt(3)]);
+            VERDICTS.get(random.nextInt(3)));
     FoundPoint found =
         new FoundPoint(
             value(random),
