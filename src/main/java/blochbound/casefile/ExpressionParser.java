@@ -72,7 +72,6 @@ final class ExpressionParser {
       Token start = peek();
       Expression factor = unary();
       if (join == Join.DIVIDED_BY
-          && start.kind() == Kind.NUMBER
           && factor instanceof Expression.Literal n
           && n.unit().symbol().contains("/")) {
         throw passage.fault(
@@ -109,14 +108,12 @@ final class ExpressionParser {
   }
 
   private Expression power() {
-    Token start = peek();
     Expression base = primary();
     if (!peek().is("^")) {
       return base;
     }
     Token caret = take();
-    boolean inBrackets = start.is("(");
-    if (!inBrackets && base instanceof Expression.Literal n && !n.unit().symbol().isEmpty()) {
+    if (base instanceof Expression.Literal n && !n.unit().symbol().isEmpty()) {
       throw passage.fault(
           caret.at(), "a power of a number with a unit needs brackets, such as (3 kHz)^2");
     }
@@ -144,7 +141,7 @@ final class ExpressionParser {
           throw passage.fault(
               token.at(), "expected a number, a name, a ket or a bracket, not " + token.shown());
         }
-        yield inBrackets(token);
+        yield new Expression.Group(inBrackets(token), token.at());
       }
     };
   }

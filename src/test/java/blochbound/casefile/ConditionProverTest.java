@@ -56,7 +56,7 @@ class ConditionProverTest {
                 + " k = 0; narrow the tolerance or move the nominal value");
     with(
             "{k: {nominal: 1, tolerance: 50 %}, l: {nominal: 1, tolerance: 50 %}}",
-            "{operator: lower@a / (§k - l + 1/2)}")
+            "{operator: lower@a / §(k - l + 1/2)}")
         .hasFaults(
             "the divisor is not proved to stay away from 0 inside the ball: it is about -0.5000 at"
                 + " k = 0.5, l = 1.5; narrow the tolerance or move the nominal value");

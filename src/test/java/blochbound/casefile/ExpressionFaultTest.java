@@ -123,7 +123,7 @@ class ExpressionFaultTest {
       List.of(
           Arguments.of("X@a / §X@b", "only numbers can divide, not operators or states"),
           Arguments.of("1 / §0 * X@a", "the divisor is zero or cannot be told from zero"),
-          Arguments.of("1 / (§1 - 1) * X@a", "the divisor is zero or cannot be told from zero"),
+          Arguments.of("1 / §(1 - 1) * X@a", "the divisor is zero or cannot be told from zero"),
           Arguments.of("1 / §sin(pi) * X@a", "the divisor is zero or cannot be told from zero"),
           Arguments.of("§0^-1 * X@a", "the divisor is zero or cannot be told from zero"),
           Arguments.of("X@a^§-1", "the exponent of an operator must be 0 or more"),

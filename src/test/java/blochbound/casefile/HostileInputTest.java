@@ -97,9 +97,9 @@ class HostileInputTest {
         "(((§1e-300^64)^64)^64)^64 * X@a",
         "a number in the expression leaves the range of 1e-300 to 1e300");
     hamiltonian(
-        "(((§x^64)^64)^64)^64 * X@a", "a parameter reaches a power over 1000, which is the limit");
+        "((§(x^64)^64)^64)^64 * X@a", "a parameter reaches a power over 1000, which is the limit");
     CaseText.pair()
-        .set("hamiltonian", "(((§1 us)^64)^64)^64 * X@a")
+        .set("hamiltonian", "(§((1 us)^64)^64)^64 * X@a")
         .hasFaults("a power of time over 1000, which is the limit");
   }
 
