@@ -66,13 +66,14 @@ public final class DeviceSampler {
     if (space.norm() == Norm.BOX || space.coordinates() < 2) {
       return Proposal.DECLARED;
     }
-    long[] kept = new long[2];
-    for (Proposal p : Proposal.values()) {
-      DeviceSampler trial = new DeviceSampler(space, SamplePoints.MONTE_CARLO, 0, p);
-      trial.draw(TRIAL_CANDIDATES, TRIAL_CANDIDATES);
-      kept[p.ordinal()] = trial.accepted;
-    }
-    return kept[1] > kept[0] ? Proposal.BALL : Proposal.DECLARED;
+    boolean ballKeepsMore = kept(space, Proposal.BALL) > kept(space, Proposal.DECLARED);
+    return ballKeepsMore ? Proposal.BALL : Proposal.DECLARED;
+  }
+
+  private static long kept(ParameterSpace space, Proposal proposal) {
+    DeviceSampler trial = new DeviceSampler(space, SamplePoints.MONTE_CARLO, 0, proposal);
+    trial.draw(TRIAL_CANDIDATES, TRIAL_CANDIDATES);
+    return trial.accepted;
   }
 
   /**
