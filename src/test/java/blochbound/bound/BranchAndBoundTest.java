@@ -161,7 +161,7 @@ class BranchAndBoundTest {
             both(2),
             Norm.BOX,
             3,
-            60),
+            1000),
         new Problem(
             "McCormick",
             BranchAndBoundTest::mcCormick,
