@@ -182,9 +182,13 @@ public final class SteadyCellBound implements CellBound {
 
     Cell cell(double[] candidate, double value) {
       int split = -1;
+      double most = -1;
       for (int j = 0; j < loss.length; j++) {
-        if (region.halfWidth(j) > 0 && (split < 0 || loss[j] > loss[split])) {
+        // Without a finite loss the widest side is halved.
+        double gain = Double.isFinite(loss[j]) ? loss[j] : region.halfWidth(j);
+        if (region.halfWidth(j) > 0 && gain > most) {
           split = j;
+          most = gain;
         }
       }
       return new Cell(
