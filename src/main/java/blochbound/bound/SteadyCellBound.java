@@ -162,7 +162,9 @@ public final class SteadyCellBound implements CellBound {
       return witness.map(w -> value - sign * w.inner(state)).orElse(Double.POSITIVE_INFINITY);
     }
 
-    /** Adds the slack of a local bound to the losses, by how far each coordinate moves the state. */
+    /**
+     * Adds the slack of a local bound to the losses, by how far each coordinate moves the state.
+     */
     private void shareOut(double slack) {
       double sum = java.util.Arrays.stream(distances.reach()).sum();
       for (int j = 0; j < loss.length && sum > 0 && Double.isFinite(slack); j++) {
