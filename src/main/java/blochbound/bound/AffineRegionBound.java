@@ -30,6 +30,7 @@ final class AffineRegionBound {
   private final double[] loss;
   private final double[] minimiser;
   private final double[] kappa;
+  private final double[] reach;
 
   AffineRegionBound(DualKernel kernel, MultiIndexTable table, int order, BallConstraint ball) {
     this.kernel = kernel;
@@ -46,6 +47,7 @@ final class AffineRegionBound {
     loss = new double[table.variables()];
     minimiser = new double[table.variables()];
     kappa = new double[table.count()];
+    reach = new double[table.variables()];
   }
 
   /**
@@ -61,7 +63,7 @@ final class AffineRegionBound {
     double scale = norms.frobeniusUp(witness);
     double remainder = remainder(scale);
     double fixed = kernel.errorUp(witness) + coordinateError(operator, scale) + slack;
-    double least = Rounding.addDown(minimum(region), -remainder);
+    double least = Rounding.addDown(minimum(1, region), -remainder);
     if (isWholeBall(region)) {
       least = Math.max(least, overWholeBall());
     }
@@ -101,12 +103,16 @@ final class AffineRegionBound {
 
   private double refined(int a, double frobenius) {
     double[] s = kernel.remainder(a);
+    if (a == 0) {
+      // What a singular centre leaves over does not shrink with the region: it must be sharp.
+      return Math.min(frobenius, Math.max(0, -norms.smallestEigenvalueDown(s, frobenius)));
+    }
     return table.isEven(a) ? norms.negativePartUp(s, frobenius) : norms.spectralUp(s, frobenius);
   }
 
-  /** Lower bound of phi over the part of the region inside the ball. */
-  private double minimum(Region region) {
-    loadPolynomial(1);
+  /** Lower bound of sign * phi over the part of the region inside the ball. */
+  private double minimum(int sign, Region region) {
+    loadPolynomial(sign);
     range.minimise(polynomial, table, polynomial.length);
     double best = range.certifiedMinimum();
     takeMinimiser();
@@ -117,7 +123,7 @@ final class AffineRegionBound {
       return best;
     }
     for (double lambda : ball.multipliers(polynomial, region)) {
-      loadPolynomial(1);
+      loadPolynomial(sign);
       double slack = ball.add(polynomial, table, region, lambda);
       range.minimise(polynomial, table, polynomial.length);
       double bound = Rounding.addDown(range.certifiedMinimum(), -slack);
@@ -215,29 +221,46 @@ final class AffineRegionBound {
   double distanceUp(StationaryMeasure measure, Hermitian near, Region region) {
     double[] coordinates = measure.reducedCoordinates(near);
     int levels = near.size();
+    Arrays.fill(reach, 0);
     double sum = square(Math.abs(1 / Math.sqrt(levels) - coordinates[0]) + 4 * Rounding.UNIT);
     for (int k = 1; k < coordinates.length; k++) {
-      double[] witness = measure.liftedBasis(k);
-      double low = certifiedLower(witness, Hermitian.identity(1), 0, region);
-      double high = -certifiedLower(negated(witness), Hermitian.identity(1), 0, region);
-      sum += square(Math.max(Math.abs(high - coordinates[k]), Math.abs(coordinates[k] - low)));
+      sum += square(deviationUp(measure.liftedBasis(k), coordinates[k], region));
     }
-    double error =
-        kernel.basis().transformError() * Rounding.inflate(near.matrix().frobeniusNorm(), 64);
-    return Rounding.addUp(
-        Rounding.sqrtUp(Rounding.inflate(sum, 2L * coordinates.length + 4)), error);
+    double norm = Rounding.inflate(near.matrix().frobeniusNorm(), 2L * levels * levels + 4);
+    double error = kernel.basis().transformError() * norm;
+    double distance = Rounding.sqrtUp(Rounding.inflate(sum, 2L * coordinates.length + 4));
+    // No state is longer than 1.
+    return Math.min(Rounding.addUp(distance, error), Rounding.addUp(1, norm));
+  }
+
+  /** Bound of |tr(W rho) - value| over all stationary states of the region. */
+  private double deviationUp(double[] witness, double value, Region region) {
+    kernel.run(witness, table, order);
+    for (int i = 0; i < reach.length; i++) {
+      reach[i] += kernel.phi()[i + 1] * kernel.phi()[i + 1];
+    }
+    double scale = norms.frobeniusUp(witness);
+    double remainder = 0;
+    for (int a = 0; a < kernel.reached(); a++) {
+      double[] s = kernel.remainder(a);
+      double frobenius = norms.frobeniusUp(s);
+      remainder += frobenius > NEGLIGIBLE * scale ? norms.spectralUp(s, frobenius) : frobenius;
+    }
+    double fixed =
+        Rounding.inflate(
+            remainder + kernel.errorUp(witness) + 8 * Rounding.UNIT * scale, kernel.reached());
+    double low = minimum(1, region);
+    double high = -minimum(-1, region);
+    return Rounding.addUp(Math.max(Math.abs(high - value), Math.abs(value - low)), fixed);
   }
 
   private static double square(double x) {
     return Rounding.timesUp(x, x);
   }
 
-  private static double[] negated(double[] vector) {
-    double[] negative = new double[vector.length];
-    for (int i = 0; i < vector.length; i++) {
-      negative[i] = -vector[i];
-    }
-    return negative;
+  /** Squared first-order move of the state along each coordinate, from the last distance. */
+  double[] reach() {
+    return reach;
   }
 
   /** Where the polynomial is expected to be smallest, in x; not a copy. */

@@ -212,9 +212,14 @@ public final class BranchAndBound {
     notifyAll();
   }
 
+  /** A bound beyond which a region has no influence on the outcome any more. */
   private synchronized double enough() {
     double width = allowedGap();
-    return Double.isInfinite(width) ? options.limit() : attained - width;
+    double narrow = attained - width;
+    boolean hasLimit = !Double.isNaN(options.limit());
+    return Double.isInfinite(width)
+        ? options.limit()
+        : hasLimit && attained >= options.limit() ? Math.max(narrow, options.limit()) : narrow;
   }
 
   private double allowedGap() {
@@ -231,14 +236,18 @@ public final class BranchAndBound {
     }
     double lower = certifiedLower();
     double width = allowedGap();
+    double closed = CLOSED * (1 + Math.abs(attained));
     boolean decideOnly = Double.isInfinite(width);
+    boolean certified = lower >= options.limit();
+    boolean refuted = attained < options.limit() - 10 * closed;
+    boolean decided = Double.isNaN(options.limit()) || certified || refuted;
     if (stop.get()) {
       ended = Optional.of(Reason.STOPPED);
-    } else if (decideOnly && lower >= options.limit()) {
+    } else if (decideOnly && certified) {
       ended = Optional.of(Reason.CERTIFIED);
-    } else if (decideOnly && attained < options.limit() - 10 * CLOSED * (1 + Math.abs(attained))) {
+    } else if (decideOnly && refuted) {
       ended = Optional.of(Reason.REFUTED);
-    } else if (attained - lower <= (decideOnly ? CLOSED * (1 + Math.abs(attained)) : width)) {
+    } else if (attained - lower <= closed || (decided && attained - lower <= width)) {
       ended = Optional.of(Reason.NARROW);
     } else if (System.nanoTime() - started > options.time().toNanos()) {
       ended = Optional.of(Reason.TIME);

@@ -33,6 +33,7 @@ public final class SteadyCellBound implements CellBound {
   private final BallConstraint ball;
   private final StationaryMeasure attained;
   private final AffineRegionBound affine;
+  private final AffineRegionBound distances;
   private final DualKernel kernel;
   private final MultiIndexTable table;
   private final int order;
@@ -57,6 +58,13 @@ public final class SteadyCellBound implements CellBound {
     kernel = new DualKernel(generator);
     table = MultiIndexTable.of(generator.space().coordinates(), order + generator.degree());
     affine = new AffineRegionBound(kernel, table, order, ball);
+    // Distances enter squared or only as a fallback: first order is enough.
+    distances =
+        new AffineRegionBound(
+            kernel,
+            MultiIndexTable.of(generator.space().coordinates(), 1 + generator.degree()),
+            1,
+            ball);
     centreState = new double[generator.basis().size()];
     Interval range = located.measure().range();
     trivial = sign > 0 ? range.lower() : -range.upper();
@@ -141,6 +149,9 @@ public final class SteadyCellBound implements CellBound {
         if (isBetter || lastTried.isEmpty()) {
           System.arraycopy(affine.minimiser(), 0, minimiser, 0, minimiser.length);
           System.arraycopy(affine.loss(), 0, loss, 0, loss.length);
+          if (!candidate.isGlobal()) {
+            shareOut(slack);
+          }
         }
         lastTried = Optional.of(candidate.operator());
       }
@@ -151,6 +162,14 @@ public final class SteadyCellBound implements CellBound {
       return witness.map(w -> value - sign * w.inner(state)).orElse(Double.POSITIVE_INFINITY);
     }
 
+    /** Adds the slack of a local bound to the losses, by how far each coordinate moves the state. */
+    private void shareOut(double slack) {
+      double sum = java.util.Arrays.stream(distances.reach()).sum();
+      for (int j = 0; j < loss.length && sum > 0 && Double.isFinite(slack); j++) {
+        loss[j] += slack * distances.reach()[j] / sum;
+      }
+    }
+
     /** Measures that are affine themselves offer the same operator everywhere. */
     private boolean isKnown(AffineBound candidate) {
       return lastTried.isPresent() && lastTried.get().equals(candidate.operator());
@@ -158,7 +177,7 @@ public final class SteadyCellBound implements CellBound {
 
     /** Bound of the distance of every stationary reduced state of the region from {@code near}. */
     private double distance(Hermitian near) {
-      return affine.distanceUp(attained, near, region);
+      return distances.distanceUp(attained, near, region);
     }
 
     Cell cell(double[] candidate, double value) {

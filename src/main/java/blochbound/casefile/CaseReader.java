@@ -23,6 +23,9 @@ public final class CaseReader {
   /** Largest case file in bytes. */
   public static final int MOST_BYTES = 1 << 20;
 
+  /** Longest line in characters; the YAML scanner is slow on longer ones. */
+  static final int LONGEST_LINE = 1 << 15;
+
   private static final int BYTE_ORDER_MARK = 0xFEFF;
 
   /** Whether a case must state requirements. */
@@ -106,14 +109,25 @@ public final class CaseReader {
     }
     boolean marked = !decoded.isEmpty() && decoded.charAt(0) == BYTE_ORDER_MARK;
     SourceText source = SourceText.of(name, marked ? decoded.substring(1) : decoded);
+    checkCharacters(source);
+    return source;
+  }
+
+  private static void checkCharacters(SourceText source) {
+    int column = 0;
     for (int i = 0; i < source.length(); i++) {
+      column = source.endsLine(i) ? 0 : column + 1;
+      if (column > LONGEST_LINE) {
+        throw FaultSignal.of(
+            source.faultAt(
+                i, "a line of more than " + LONGEST_LINE + " characters; break the line"));
+      }
       if (!isPrintable(source.at(i))) {
         String code = String.format("U+%04X", source.at(i));
         throw FaultSignal.of(
             source.faultAt(i, "the character " + code + " is not allowed in YAML text"));
       }
     }
-    return source;
   }
 
   /** The printable characters of YAML 1.2, production 1. */

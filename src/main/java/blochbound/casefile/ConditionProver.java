@@ -43,7 +43,7 @@ final class ConditionProver {
         + wanted
         + " inside the ball: it is about "
         + String.format(Locale.ROOT, "%.4g", failure.value())
-        + (timeUnit.equals(UnitTable.NO_UNIT) ? "" : " (in units of " + timeUnit + ")")
+        + (timeUnit.equals(UnitTable.NO_UNIT) ? "" : " (with time in " + timeUnit + ")")
         + point(c, failure.coordinates().stream().mapToDouble(Double::doubleValue).toArray())
         + "; narrow the tolerance or move the nominal value";
   }

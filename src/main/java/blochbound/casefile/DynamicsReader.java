@@ -70,7 +70,8 @@ final class DynamicsReader {
     Numeric rate = expressions.real(passage, "the rate");
     Scalar value = rate.re();
     if (value.isConstant() && value.constantTerm().enclosure().lower() < 0) {
-      throw passage.fault("the rate is negative; it must be 0 or more");
+      throw passage.fault(
+          "the rate is negative or cannot be told from negative; it must be 0 or more");
     }
     if (!value.isConstant()) {
       expressions.requireNonNegative(value, passage, "the rate");

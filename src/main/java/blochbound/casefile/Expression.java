@@ -99,6 +99,19 @@ sealed interface Expression {
   }
 
   /**
+   * An expression in brackets, which is never taken for a bare number.
+   *
+   * @param inner the expression
+   * @param at offset of the opening bracket
+   */
+  record Group(Expression inner, int at) implements Expression {
+    @Override
+    public Value evaluate(Evaluator evaluator) {
+      return inner.evaluate(evaluator);
+    }
+  }
+
+  /**
    * The negative.
    *
    * @param operand of which expression

@@ -141,7 +141,7 @@ final class ExpressionParser {
           throw passage.fault(
               token.at(), "expected a number, a name, a ket or a bracket, not " + token.shown());
         }
-        yield inBrackets(token);
+        yield new Expression.Group(inBrackets(token), token.at());
       }
     };
   }

@@ -26,10 +26,10 @@ final class Expressions {
   /** A real number that may depend on parameters. */
   Numeric real(Passage passage, String what) {
     Value value = value(passage);
-    if (!(value instanceof Numeric n) || !n.isReal()) {
+    if (!(value instanceof Numeric n) || !n.mayBeReal()) {
       throw passage.fault(what + " must be a real number, not an operator or a state");
     }
-    return n;
+    return Numeric.real(n.re(), n.dimension());
   }
 
   /** An operator; a number is that multiple of the identity. */

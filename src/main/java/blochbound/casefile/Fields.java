@@ -2,16 +2,19 @@ package blochbound.casefile;
 
 import blochbound.casefile.YamlNode.Entry;
 import blochbound.casefile.YamlNode.Mapping;
+import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 
 /** The entries of a mapping whose keys are known words. */
 final class Fields {
   private final Mapping mapping;
   private final String what;
   private final Map<String, YamlNode> values = new LinkedHashMap<>();
+  private final Set<String> misspelt = new HashSet<>();
 
   /**
    * Logs every unknown key and every key without a value.
@@ -24,6 +27,7 @@ final class Fields {
     for (Entry e : mapping.entries()) {
       String key = e.key().text();
       if (!known.contains(key)) {
+        Vocabulary.nearestWord(key, known).ifPresent(misspelt::add);
         log.add(
             e.key()
                 .fault(
@@ -62,14 +66,24 @@ final class Fields {
     return node(key).map(n -> n.asScalar(expected));
   }
 
-  /** The value of a key that must be there. */
+  /** The value of a key that must be there; ends quietly when a misspelt key stands for it. */
   YamlNode needed(String key) {
-    return node(key).orElseThrow(() -> fault("`" + key + "` is missing in " + what));
+    return node(key)
+        .orElseThrow(
+            () ->
+                isMisspelt(key)
+                    ? FaultSignal.following()
+                    : fault("`" + key + "` is missing in " + what));
   }
 
   /** The text of a key that must be there. */
   YamlScalar neededScalar(String key, String expected) {
     return needed(key).asScalar(expected);
+  }
+
+  /** Tells whether an unknown key was probably meant to be this one. */
+  boolean isMisspelt(String key) {
+    return misspelt.contains(key);
   }
 
   /** A fault of the whole mapping. */

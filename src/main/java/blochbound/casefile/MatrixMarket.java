@@ -67,7 +67,7 @@ final class MatrixMarket {
 
   /** Reads the first line and returns the layout. */
   private String header() {
-    String[] words = lines[line++].trim().toLowerCase(Locale.ROOT).split("\\s+");
+    String[] words = lines[line++].trim().toLowerCase(Locale.ROOT).split("\\s+", -1);
     boolean known =
         words.length == 5
             && words[0].equals("%%matrixmarket")
@@ -184,8 +184,9 @@ final class MatrixMarket {
       return;
     }
     int to = column * size + row;
-    re[to] = skew ? -re[from] : re[from];
-    im[to] = skew || hermitian ? -im[from] : im[from];
+    // Adding zero keeps negative zeros out.
+    re[to] = 0.0 + (skew ? -re[from] : re[from]);
+    im[to] = 0.0 + (skew || hermitian ? -im[from] : im[from]);
     errors[to] = errors[from];
     errors[size * size + to] = errors[size * size + from];
   }
@@ -214,7 +215,7 @@ final class MatrixMarket {
     while (line < lines.length) {
       String text = lines[line++].trim();
       if (!text.isEmpty() && !text.startsWith("%")) {
-        return Optional.of(text.split("\\s+"));
+        return Optional.of(text.split("\\s+", -1));
       }
     }
     return Optional.empty();

@@ -102,6 +102,9 @@ final class RequirementReader {
 
   private static Sense sense(Fields fields) {
     boolean least = fields.has(Sense.AT_LEAST.key());
+    if (fields.isMisspelt(Sense.AT_LEAST.key()) || fields.isMisspelt(Sense.AT_MOST.key())) {
+      throw FaultSignal.following();
+    }
     if (least == fields.has(Sense.AT_MOST.key())) {
       throw fields.fault(
           least

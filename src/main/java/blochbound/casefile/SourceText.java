@@ -7,6 +7,8 @@ package blochbound.casefile;
  * @param characters its code points
  */
 record SourceText(String file, int[] characters) {
+  private static final int LONGEST_MESSAGE = 1000;
+
   /** The text of a file. */
   static SourceText of(String file, String text) {
     return new SourceText(file, text.codePoints().toArray());
@@ -29,7 +31,12 @@ record SourceText(String file, int[] characters) {
 
   /** A fault at a line and a column that count from 1. */
   Fault fault(int line, int column, String message) {
-    return new Fault(file, line, column, message);
+    // Hostile text must not flood the terminal.
+    String shown =
+        message.length() <= LONGEST_MESSAGE
+            ? message
+            : message.substring(0, LONGEST_MESSAGE) + "...";
+    return new Fault(file, line, column, shown);
   }
 
   /** A fault at a character. */

@@ -47,6 +47,11 @@ sealed interface Value {
       return im.isZero();
     }
 
+    /** Tells whether the imaginary part is zero within its rounding errors. */
+    boolean mayBeReal() {
+      return im.terms().values().stream().allMatch(c -> c.enclosure().contains(0));
+    }
+
     boolean isConstant() {
       return re.isConstant() && im.isConstant();
     }

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Collection;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import java.util.Set;
 import java.util.regex.Pattern;
 
@@ -40,20 +41,24 @@ final class Vocabulary {
 
   /** Text {@code ; the nearest known is `...`} when a known word is near, otherwise nothing. */
   static String nearest(String word, Collection<String> known) {
-    int most = Math.max(1, Math.min(3, word.length() / 3));
-    String best = "";
-    int least = most + 1;
+    return nearestWord(word, known).map(w -> "; the nearest known is `" + w + "`").orElse("");
+  }
+
+  /** The first of the nearest known words, when it is near. */
+  static Optional<String> nearestWord(String word, Collection<String> known) {
+    // A word of one letter is near to itself only, whatever its case.
+    int least = word.length() < 2 ? 1 : 1 + Math.min(3, (word.length() + 2) / 3);
+    Optional<String> best = Optional.empty();
     for (String candidate : known) {
-      int distance =
-          word.toLowerCase(Locale.ROOT).equals(candidate.toLowerCase(Locale.ROOT))
-              ? 0
-              : distance(word, candidate, least);
+      boolean differsInCaseOnly =
+          word.toLowerCase(Locale.ROOT).equals(candidate.toLowerCase(Locale.ROOT));
+      int distance = differsInCaseOnly ? 0 : distance(word, candidate, least);
       if (distance < least) {
         least = distance;
-        best = candidate;
+        best = Optional.of(candidate);
       }
     }
-    return best.isEmpty() ? "" : "; the nearest known is `" + best + "`";
+    return best;
   }
 
   /** Edit distance with insertions, deletions and replacements, cut at {@code limit}. */

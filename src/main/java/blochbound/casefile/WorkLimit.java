@@ -18,11 +18,12 @@ final class WorkLimit {
   /** Most monomials of one product. */
   static final int MOST_MONOMIALS = 10_000;
 
-  private static final long MOST_SCALAR_STEPS = 100_000_000L;
-  private static final long MOST_MATRIX_STEPS = 2_000_000_000L;
+  private static final long MOST_SCALAR_STEPS = 20_000_000L;
+  private static final long STEPS_OF_A_PAIR = 100;
+  private static final long MOST_MATRIX_STEPS = 1_000_000_000L;
   private static final long MOST_ENTRIES = 4_000_000L;
   private static final int LONGEST_KEY = 20_000;
-  private static final int MOST_BITS = 8192;
+  private static final int MOST_BITS = 4096;
   private static final int LARGEST_EXPONENT = 1000;
   private static final String HUGE_EXPONENT =
       "a parameter reaches a power over " + LARGEST_EXPONENT + ", which is the limit";
@@ -40,8 +41,7 @@ final class WorkLimit {
       return Optional.of(
           "the product has over " + MOST_MONOMIALS + " monomials, which is the limit");
     }
-    // A sum is copied for every monomial that is added to it.
-    scalarSteps += pairs * pairs;
+    scalarSteps += STEPS_OF_A_PAIR * pairs;
     return overWork();
   }
 
@@ -136,8 +136,8 @@ final class WorkLimit {
   }
 
   private static boolean isShort(ExactNumber number) {
-    return number.ratio().getNumerator().bitLength() <= MOST_BITS
-        && number.ratio().getDenominator().bitLength() <= MOST_BITS
+    return number.numerator().bitLength() <= MOST_BITS
+        && number.denominator().bitLength() <= MOST_BITS
         && Math.abs(number.piPower()) <= 1000;
   }
 }

@@ -23,12 +23,16 @@ public final class Blochbound {
 
   /** Runs the program on the standard streams and ends the virtual machine. */
   public static void main(String[] arguments) {
+    runUntilSignal(arguments, Engine.STANDARD);
+  }
+
+  /** Runs the program with an engine as {@link #main} does. */
+  static void runUntilSignal(String[] arguments, Engine engine) {
     PrintStream out = stream(FileDescriptor.out);
     PrintStream err = stream(FileDescriptor.err);
-    Attended attended = System.console() == null ? Attended.NO : Attended.TERMINAL;
     int code;
     try (Interruption interruption = Interruption.watch()) {
-      code = run(arguments, new Session(Engine.STANDARD, out, err, attended, interruption.stop()));
+      code = run(arguments, new Session(engine, out, err, Attended.detect(), interruption.stop()));
     }
     System.exit(code);
   }
@@ -66,8 +70,8 @@ public final class Blochbound {
     line.addSubcommand(new ShowCommand(session));
     prepare(line);
     line.getSubcommands().values().forEach(Blochbound::prepare);
-    return line.setOut(new PrintWriter(session.out(), true))
-        .setErr(new PrintWriter(session.err(), true))
+    return line.setOut(writer(session.out()))
+        .setErr(writer(session.err()))
         .setColorScheme(Help.defaultColorScheme(Ansi.OFF))
         .setUsageHelpWidth(100)
         .setExpandAtFiles(false)
@@ -78,6 +82,10 @@ public final class Blochbound {
 
   private static void prepare(CommandLine command) {
     command.getCommandSpec().mixinStandardHelpOptions(true).versionProvider(new VersionText());
+  }
+
+  private static PrintWriter writer(PrintStream stream) {
+    return new PrintWriter(stream, true, StandardCharsets.UTF_8);
   }
 
   private static PrintStream stream(FileDescriptor descriptor) {

@@ -81,11 +81,13 @@ final class CertifyCommand implements Callable<Integer> {
     }
   }
 
-  @SuppressWarnings("try") // the progress line only has to be taken away at the end
   private CertificationResult run(DesignCase designCase, CertificationOptions options) {
     Attended attended = output.isQuiet() ? Attended.NO : session.attended();
-    try (Progress progress = Progress.show(attended, session.err(), designCase.title())) {
+    Progress progress = Progress.show(attended, session.err(), designCase.title());
+    try {
       return session.engine().certify(designCase, options, session.stop());
+    } finally {
+      progress.end();
     }
   }
 

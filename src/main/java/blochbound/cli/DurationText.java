@@ -18,7 +18,7 @@ final class DurationText {
       Map.of(
           "ms", 1_000_000L, "s", 1_000_000_000L, "min", 60_000_000_000L, "h", 3_600_000_000_000L);
   private static final BigDecimal MOST_NANOSECONDS =
-      BigDecimal.valueOf(Duration.ofHours(8760).toNanos());
+      BigDecimal.valueOf(Duration.ofDays(365).toNanos());
 
   private DurationText() {}
 

@@ -8,7 +8,7 @@ import java.util.concurrent.TimeUnit;
 /**
  * A line on a terminal that tells what is being worked on and for how long; it is wiped at the end.
  */
-final class Progress implements AutoCloseable {
+final class Progress {
   private static final int WIDTH = 79;
   private static final long STEP_MILLISECONDS = 1000;
 
@@ -23,8 +23,8 @@ final class Progress implements AutoCloseable {
   }
 
   /**
-   * Shows a task on a terminal until it is closed: from its first second on, and nothing where
-   * nobody watches.
+   * Shows a task on a terminal until it ends: from its first second on, and nothing where nobody
+   * watches.
    */
   static Progress show(Attended attended, PrintStream terminal, String task) {
     Progress progress = new Progress(terminal, task);
@@ -61,8 +61,8 @@ final class Progress implements AutoCloseable {
     return time + start + " ".repeat(room - start.length());
   }
 
-  @Override
-  public void close() {
+  /** Wipes the line. */
+  void end() {
     done.countDown();
     try {
       writer.join();

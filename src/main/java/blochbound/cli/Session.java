@@ -4,6 +4,7 @@ import blochbound.casefile.CaseFaultException;
 import blochbound.casefile.CaseReader.RequirementRule;
 import blochbound.casefile.Fault;
 import blochbound.model.DesignCase;
+import java.io.Console;
 import java.io.PrintStream;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -26,7 +27,23 @@ record Session(
     /** At a terminal. */
     TERMINAL,
     /** In a script, a pipe or a test. */
-    NO
+    NO;
+
+    /** Whether this virtual machine was started at a terminal. */
+    @SuppressWarnings("SystemConsoleNull") // what newer machines do is asked for as well
+    static Attended detect() {
+      Console console = System.console();
+      return console != null && isTerminal(console) ? TERMINAL : NO;
+    }
+
+    /** Java 22 and later have a console without a terminal too, and this method to tell. */
+    private static boolean isTerminal(Console console) {
+      try {
+        return (boolean) Console.class.getMethod("isTerminal").invoke(console);
+      } catch (ReflectiveOperationException e) {
+        return true;
+      }
+    }
   }
 
   /** Tells whether the run was asked to end early. */

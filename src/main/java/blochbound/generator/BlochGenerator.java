@@ -26,7 +26,10 @@ import java.util.function.UnaryOperator;
  */
 public final class BlochGenerator {
   /** Degree at which coefficients that are no polynomials are cut on a region. */
-  public static final int SMOOTH_DEGREE = 3;
+  public static final int SMOOTH_DEGREE = 2;
+
+  /** Degree at which polynomial coefficients are cut on a region, too. */
+  public static final int LARGEST_DEGREE = 3;
 
   private final BlochBasis basis;
   private final ParameterSpace space;
@@ -40,7 +43,11 @@ public final class BlochGenerator {
     degree =
         terms.stream()
             .map(GeneratorTerm::monomial)
-            .mapToInt(m -> m.isPolynomial() || m.isOne() ? m.degree() : SMOOTH_DEGREE)
+            .mapToInt(
+                m ->
+                    m.isPolynomial() || m.isOne()
+                        ? Math.min(m.degree(), LARGEST_DEGREE)
+                        : SMOOTH_DEGREE)
             .max()
             .orElse(0);
   }
@@ -51,11 +58,17 @@ public final class BlochGenerator {
   }
 
   /**
-   * Generator multiplied by a common denominator that is proved positive on the ball: the same
-   * stationary states, and polynomial wherever the coefficients were rational.
+   * Generator with the same stationary states as the device, in the cheapest form to expand: where
+   * its degree stays small, multiplied by a common denominator that is proved positive on the ball,
+   * so that rational coefficients become polynomials; else as written.
    */
   public static BlochGenerator stationary(Device device) {
-    return build(device, CommonDenominator.of(device)::clear);
+    BlochGenerator cleared = build(device, CommonDenominator.of(device)::clear);
+    boolean isExact =
+        cleared.terms.stream()
+            .map(GeneratorTerm::monomial)
+            .allMatch(m -> m.isOne() || (m.isPolynomial() && m.degree() <= LARGEST_DEGREE));
+    return isExact ? cleared : of(device);
   }
 
   private static BlochGenerator build(Device device, UnaryOperator<Scalar> clear) {
@@ -128,8 +141,8 @@ public final class BlochGenerator {
   }
 
   /**
-   * Largest degree of a coefficient's expansion on a region: that of the monomial for polynomials,
-   * {@link #SMOOTH_DEGREE} for others; at least 1.
+   * Largest degree of a coefficient's expansion on a region: that of the monomial for polynomials up
+   * to {@link #LARGEST_DEGREE}, {@link #SMOOTH_DEGREE} for others; at least 1.
    */
   public int degree() {
     return Math.max(1, degree);

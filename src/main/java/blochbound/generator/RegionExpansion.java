@@ -16,8 +16,9 @@ import java.util.Map;
  * The generator on one region: every coefficient as a polynomial in x in [-1, 1]^m, with z = centre
  * + x * halfWidth, plus a remainder that covers truncation and rounding.
  *
- * <p>Polynomial coefficients are expanded without truncation, so that their remainder is rounding
- * only; smooth ones are cut at {@link BlochGenerator#SMOOTH_DEGREE}.
+ * <p>Polynomial coefficients up to {@link BlochGenerator#LARGEST_DEGREE} are expanded without
+ * truncation, so that their remainder is rounding only; others are cut at {@link
+ * BlochGenerator#degree}.
  */
 public final class RegionExpansion {
   private final BlochGenerator generator;

@@ -34,8 +34,10 @@ public record Interval(double lower, double upper) {
   /** Enclosure of the number pi. */
   public static final Interval PI = new Interval(Math.PI, Math.nextUp(Math.PI));
 
-  /** Checks the order of the ends. */
+  /** Checks the order of the ends and gives zero one form, without a sign. */
   public Interval {
+    lower += 0.0;
+    upper += 0.0;
     if (Double.isNaN(lower) != Double.isNaN(upper)) {
       throw new IllegalArgumentException("both ends of the empty interval are NaN");
     }
@@ -44,13 +46,25 @@ public record Interval(double lower, double upper) {
     }
   }
 
-  /** The single number {@code value}, exactly. */
+  /**
+   * The single number {@code value}, exactly.
+   *
+   * @throws IllegalArgumentException when the value is NaN or infinite
+   */
   public static Interval of(double value) {
-    return new Interval(value, value);
+    return of(value, value);
   }
 
-  /** The numbers between {@code lower} and {@code upper}. */
+  /**
+   * The numbers between {@code lower} and {@code upper}.
+   *
+   * @throws IllegalArgumentException when an end is NaN (a failed computation is not the empty set)
+   *     or the ends are out of order
+   */
   public static Interval of(double lower, double upper) {
+    if (Double.isNaN(lower) || Double.isNaN(upper)) {
+      throw new IllegalArgumentException("an interval end is not a number");
+    }
     return new Interval(lower, upper);
   }
 
@@ -93,9 +107,17 @@ public record Interval(double lower, double upper) {
     return other.isEmpty() || (lower <= other.lower && other.upper <= upper);
   }
 
-  /** A number near the middle. */
+  /** A finite number inside, near the middle of a bounded interval; NaN for the empty set. */
   public double middle() {
-    return lower == upper ? lower : 0.5 * lower + 0.5 * upper;
+    if (lower == upper) {
+      return lower;
+    }
+    boolean openBelow = lower == Double.NEGATIVE_INFINITY;
+    boolean openAbove = upper == Double.POSITIVE_INFINITY;
+    if (openBelow || openAbove) {
+      return openBelow && openAbove ? 0 : openAbove ? Math.max(0, lower) : Math.min(0, upper);
+    }
+    return 0.5 * lower + 0.5 * upper;
   }
 
   /** Upper bound of the distance of any member from {@link #middle()}. */
@@ -199,10 +221,13 @@ public record Interval(double lower, double upper) {
     if (exponent % 2 == 0) {
       return half;
     }
+    if (lower == upper) {
+      return half.times(this);
+    }
     // An odd power is monotone: each end is enclosed on its own.
-    return lower == upper
-        ? half.times(this)
-        : new Interval(of(lower).power(exponent).lower, of(upper).power(exponent).upper);
+    return new Interval(
+        Double.isInfinite(lower) ? lower : of(lower).power(exponent).lower,
+        Double.isInfinite(upper) ? upper : of(upper).power(exponent).upper);
   }
 
   /** Square root of the part that is not negative. */
@@ -262,7 +287,10 @@ public record Interval(double lower, double upper) {
   }
 
   private static double sumDown(double a, double b) {
-    return a == 0 || b == 0 || Double.isInfinite(a + b) ? a + b : Math.nextDown(a + b);
+    if (a == 0 || b == 0 || Double.isInfinite(a) || Double.isInfinite(b)) {
+      return a + b;
+    }
+    return Math.nextDown(a + b);
   }
 
   private static double quotientDown(double a, double b) {

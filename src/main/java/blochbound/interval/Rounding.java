@@ -15,6 +15,11 @@ public final class Rounding {
   /** Bounds the absolute error that underflow adds to one operation (with a wide margin). */
   public static final double TINY = 0x1p-1000;
 
+  // A sum of squares in this range has lost less than 2^-100 of itself to underflow, even for 2^30
+  // entries, and nothing to overflow.
+  private static final double LEAST_SAFE_SQUARE = 0x1p-940;
+  private static final double MOST_SAFE_SQUARE = 0x1p1000;
+
   private Rounding() {}
 
   /** Upper bound of gamma_n = n u / (1 - n u); infinite when n u reaches one half. */
@@ -64,7 +69,30 @@ public final class Rounding {
     for (int i = offset; i < offset + length; i++) {
       sum += vector[i] * vector[i];
     }
-    return inflate(Math.sqrt(inflate(sum, length + 2)), 2) + length * TINY;
+    if (sum >= LEAST_SAFE_SQUARE && sum <= MOST_SAFE_SQUARE) {
+      return inflate(Math.sqrt(inflate(sum, length + 2)), 2) + length * TINY;
+    }
+    return scaledNormUp(vector, offset, length);
+  }
+
+  /** The same for vectors whose squares may underflow or overflow. */
+  private static double scaledNormUp(double[] vector, int offset, int length) {
+    double most = 0;
+    for (int i = offset; i < offset + length; i++) {
+      most = Math.max(most, Math.abs(vector[i]));
+    }
+    if (most == 0 || !(most < Double.POSITIVE_INFINITY)) {
+      return most;
+    }
+    // Largest entry between 1 and 2; what underflows here is smaller than 2^-1000 of it.
+    int exponent = Math.getExponent(most);
+    double sum = 0;
+    for (int i = offset; i < offset + length; i++) {
+      double scaled = Math.scalb(vector[i], -exponent);
+      sum += scaled * scaled;
+    }
+    double norm = inflate(Math.sqrt(inflate(sum, length + 2)), 2) + length * TINY;
+    return Math.nextUp(Math.scalb(norm, exponent));
   }
 
   /**

@@ -26,18 +26,13 @@ public record ComplexBall(ComplexMatrix centre, double radius) {
 
   /** Upper bound of the Frobenius norm of every member. */
   public double normUp() {
-    return Rounding.addUp(centreNormUp(), radius);
-  }
-
-  private double centreNormUp() {
-    return Rounding.inflate(centre.frobeniusNorm(), 2L * centre.rows() * centre.columns() + 4);
+    return Rounding.addUp(centre.frobeniusNormUp(), radius);
   }
 
   /** Sum. */
   public ComplexBall plus(ComplexBall other) {
     ComplexMatrix sum = centre.plus(other.centre);
-    double rounding =
-        Rounding.UNIT * Rounding.inflate(sum.frobeniusNorm(), 2L * sum.rows() * sum.columns() + 4);
+    double rounding = Rounding.timesUp(Rounding.UNIT, sum.frobeniusNormUp());
     return new ComplexBall(sum, sumUp(radius, other.radius, rounding));
   }
 
@@ -53,19 +48,15 @@ public record ComplexBall(ComplexMatrix centre, double radius) {
 
   /** Matrix product. */
   public ComplexBall times(ComplexBall other) {
-    double a = centreNormUp();
-    double b = other.centreNormUp();
-    double rounding =
-        Rounding.timesUp(Rounding.gamma(2L * centre.columns() + 2), Rounding.timesUp(a, b));
-    return new ComplexBall(centre.times(other.centre), productRadius(a, b, other.radius, rounding));
+    // Each part of an entry takes k + 1 roundings for k inner terms; the modulus sqrt(2) as much.
+    long products = 4L * centre.rows() * centre.columns() * other.centre.columns();
+    return product(centre.times(other.centre), other, 2L * centre.columns() + 2, products);
   }
 
   /** Kronecker product. */
   public ComplexBall kron(ComplexBall other) {
-    double a = centreNormUp();
-    double b = other.centreNormUp();
-    double rounding = Rounding.timesUp(Rounding.gamma(4), Rounding.timesUp(a, b));
-    return new ComplexBall(centre.kron(other.centre), productRadius(a, b, other.radius, rounding));
+    ComplexMatrix product = centre.kron(other.centre);
+    return product(product, other, 4, 4L * product.rows() * product.columns());
   }
 
   /** Multiple with a real factor that is known up to an interval. */
@@ -74,12 +65,25 @@ public record ComplexBall(ComplexMatrix centre, double radius) {
       return this;
     }
     double middle = factor.middle();
-    double norm = centreNormUp();
+    double norm = centre.frobeniusNormUp();
     double fromFactor = Rounding.timesUp(factor.radius(), Rounding.addUp(norm, radius));
     double fromRadius = Rounding.timesUp(Math.abs(middle), radius);
-    double rounding = Rounding.timesUp(Rounding.UNIT, Rounding.timesUp(Math.abs(middle), norm));
+    ComplexMatrix scaled = centre.scale(middle);
     return new ComplexBall(
-        centre.scale(middle), sumUp(fromFactor, fromRadius, isPowerOfTwo(middle) ? 0 : rounding));
+        scaled, sumUp(fromFactor, fromRadius, scalingError(scaled, middle, norm)));
+  }
+
+  /** Bound of the rounding error of {@code scaled}; zero for powers of two without underflow. */
+  private double scalingError(ComplexMatrix scaled, double factor, double norm) {
+    boolean isExact =
+        factor == 0
+            || (isPowerOfTwo(factor)
+                && scaled.scale(1 / factor).minus(centre).frobeniusNormUp() == 0);
+    if (isExact) {
+      return 0;
+    }
+    double relative = Rounding.timesUp(Rounding.UNIT, Rounding.timesUp(Math.abs(factor), norm));
+    return Rounding.addUp(relative, underflow(2L * centre.rows() * centre.columns()));
   }
 
   /** Multiple with the imaginary unit, exactly. */
@@ -92,27 +96,41 @@ public record ComplexBall(ComplexMatrix centre, double radius) {
     return new ComplexBall(centre.adjoint(), radius);
   }
 
-  /** Tells whether the zero matrix is a member. */
+  /** Tells whether the zero matrix may be a member; false is certain. */
   public boolean mayBeZero() {
-    return centre.frobeniusNorm() <= radius;
+    return centre.frobeniusNorm() <= radius * (1 + 1e-9);
   }
 
-  /** Tells whether a Hermitian matrix may be a member. */
+  /** Tells whether a Hermitian matrix may be a member; false is certain. */
   public boolean mayBeHermitian() {
     return centre.minus(centre.adjoint()).frobeniusNorm() <= 2 * radius * (1 + 1e-9);
   }
 
   private static boolean isPowerOfTwo(double value) {
-    return value == 0 || Math.abs(value) == Math.ulp(value) * 0x1p52;
+    return Math.abs(value) == Math.ulp(value) * 0x1p52;
   }
 
-  private double productRadius(double a, double b, double otherRadius, double rounding) {
+  /** Bound of what underflow adds to sums of that many products. */
+  private static double underflow(long products) {
+    return products * Double.MIN_VALUE;
+  }
+
+  /**
+   * The computed product of the two centres with the bound of its error, from the number of
+   * roundings that an entry takes and the number of real products altogether.
+   */
+  private ComplexBall product(
+      ComplexMatrix computed, ComplexBall other, long roundings, long products) {
+    double a = centre.frobeniusNormUp();
+    double b = other.centre.frobeniusNormUp();
     double cross =
         sumUp(
-            Rounding.timesUp(a, otherRadius),
+            Rounding.timesUp(a, other.radius),
             Rounding.timesUp(b, radius),
-            Rounding.timesUp(radius, otherRadius));
-    return cross == 0 ? rounding : Rounding.addUp(cross, rounding);
+            Rounding.timesUp(radius, other.radius));
+    double relative = Rounding.timesUp(Rounding.gamma(roundings), Rounding.timesUp(a, b));
+    double lost = a == 0 || b == 0 ? 0 : underflow(products);
+    return new ComplexBall(computed, sumUp(cross, relative, lost));
   }
 
   private static double sumUp(double a, double b, double c) {

@@ -1,6 +1,7 @@
 package blochbound.linalg;
 
 import blochbound.check.Check;
+import blochbound.interval.Rounding;
 import java.util.Arrays;
 
 /**
@@ -240,6 +241,11 @@ public final class ComplexMatrix {
       sum += re[k] * re[k] + im[k] * im[k];
     }
     return Math.sqrt(sum);
+  }
+
+  /** Certified upper bound of the Frobenius norm. */
+  public double frobeniusNormUp() {
+    return Rounding.normUp(new double[] {Rounding.normUp(re), Rounding.normUp(im)});
   }
 
   /** Tells whether all entries are finite. */

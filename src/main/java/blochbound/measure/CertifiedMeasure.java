@@ -102,9 +102,11 @@ abstract class CertifiedMeasure implements Measure {
   }
 
   private void checkSize(Hermitian near) {
-    Check.that(
-        near.size() == dimension,
-        "the matrix has " + near.size() + " rows, the measure is on " + dimension + " levels");
+    // The message is built only when needed: this stands in the innermost loop of the search.
+    if (near.size() != dimension) {
+      throw new IllegalArgumentException(
+          "the matrix has " + near.size() + " rows, the measure is on " + dimension + " levels");
+    }
   }
 
   /** Ascending by sign * tr(W near) + slack at distance zero. */

@@ -11,25 +11,26 @@ import blochbound.linalg.HermitianEigen;
  * A bound of the concurrence from above that is tangent at a positive matrix, with a proved
  * second-order remainder.
  *
- * <p><b>Statement.</b> Let Z be an invertible 4 x 4 matrix, s = Z Z^+ with smallest eigenvalue m
- * and largest at most l, a_j = z_j^T YY z_j for its columns, alpha_j &gt; 0, theta_j = conj(a_j) /
- * alpha_j, G the Hermitian part of Z^-+ Theta Z^T YY. For every state rho with q = |rho - s|_F / m
- * &lt; 1: C(rho) &lt;= tr(G rho) + sum_j (alpha_j^2 - |a_j|^2)/(2 alpha_j) + remainder,
+ * <p><b>Statement.</b> Let Z be an invertible 4 x 4 matrix, s = Z Z^+ with eigenvalues from m to at
+ * most l, a_j = z_j^T YY z_j for its columns, alpha_j &gt; 0, theta_j = conj(a_j) / alpha_j, G the
+ * Hermitian part of Z^-+ Theta Z^T YY. For every state rho, with D = rho - s, v = |D|_F / sqrt(m)
+ * and q = |D|_F / m: C(rho) &lt;= tr(G rho) + sum_j (alpha_j^2 - |a_j|^2)/(2 alpha_j) + remainder,
  *
- * <p>remainder = t l q^2 (2 h + k^2) + (2 r + l k q)^2 k^2 q^2 / (2 alpha), k = 1/(1 + sqrt(1 -
- * q)), h = 1/(4 (1 - q/2 + sqrt(1 - q))), t = max |theta_j|, alpha = min alpha_j, r = longest row
- * of Z^T YY Z; for q &gt;= 1 the same with k = 1, h = 1/2.
+ * <p>remainder = t v^2 (2 h sqrt(l/m) + k^2) + (2 sqrt(l) k v + k^2 v^2)^2 / (2 alpha), k = 1/(1 +
+ * sqrt(1 - q)), h = 1/(4 (1 - q/2 + sqrt(1 - q))), t = max |theta_j|, alpha = min alpha_j; for q
+ * &gt;= 1 the same with k = 1, h = 1/2.
  *
- * <p><b>Proof.</b> H = s^(-1/2) Z is unitary. With T = s^(-1/2) (rho - s) s^(-1/2) &gt;= -1, |T|_F
- * &lt;= q, the columns of Z' = s^(1/2) (1 + T)^(1/2) H decompose rho, so C(rho) &lt;= sum |z'_j^T
- * YY z'_j|. Put (1 + T)^(1/2) = 1 + K, tau = s^(1/2)T YY s^(1/2), so |tau| &lt;= l; then z'_j^T YY
- * z'_j = a_j + b_j with b_j = 2 h_j^T tau K h_j + (K h_j)^T tau (K h_j). For every alpha &gt; 0, |a
- * + b| &lt;= (alpha^2 + |a + b|^2)/(2 alpha). The linear part sums to Re sum theta_j b_j. There K =
- * T/2 - R with 0 &lt;= R, tr R &lt;= h q^2 and |K|_F &lt;= k q (scalar: sqrt(1+x) - 1 = x/(1 +
- * sqrt(1+x)), 1 + x/2 - sqrt(1+x) = (x^2/4)/(1 + x/2 + sqrt(1+x)), x &gt;= -q). T gives tr(G (rho -
- * s)), R at most 2 t l h q^2, the square of K at most t l k^2 q^2. Finally |b_j| &lt;= (2 r + l k
- * q) |K h_j|, as |h_j^T tau| is the length of row j of H^T tau H = Z^T YY Z. And tr(G s) = sum
- * |a_j|^2/alpha_j.
+ * <p><b>Proof.</b> H = s^(-1/2) Z is unitary. With T = s^(-1/2) D s^(-1/2) &gt;= -1, |T| &lt;= q,
+ * the columns of Z' = s^(1/2) (1 + T)^(1/2) H decompose rho, so C(rho) &lt;= sum |z'_j^T YY z'_j|.
+ * Put (1 + T)^(1/2) = 1 + K and tau = (s^(1/2))^T YY s^(1/2), symmetric; then z'_j^T YY z'_j = a_j
+ * + b_j with b_j = 2 h_j^T tau K h_j + (K h_j)^T tau (K h_j). For every alpha &gt; 0, |a + b| &lt;=
+ * (alpha^2 + |a + b|^2)/(2 alpha), whose linear part sums to Re sum theta_j b_j. Scalars: sqrt(1 +
+ * x) - 1 = x/(1 + sqrt(1 + x)) and 1 + x/2 - sqrt(1 + x) = (x^2/4)/(1 + x/2 + sqrt(1 + x)), so K =
+ * T p(T) = T/2 - T r(T) T with |p(T)| &lt;= k and |r(T)| &lt;= h. T/2 gives tr(G D), and tr(G s) =
+ * sum |a_j|^2/alpha_j. Since tau T = (s^(1/2))^T YY D s^(-1/2) and |D s^(-1/2)|_F &lt;= v: |tau
+ * K|_F &lt;= sqrt(l) k v, |K^T tau K|_1 &lt;= k^2 v^2, |tau T r(T) T|_1 &lt;= sqrt(l) h v^2 /
+ * sqrt(m). As H is unitary, these bound the sums over j: twice the last and the second times t, and
+ * sqrt(sum |b_j|^2) &lt;= 2 |tau K|_F + |K^T tau K|_1.
  *
  * <p>Z is the optimal decomposition (Wootters 1998): Takagi vectors of tau with phases 1, i, i, i,
  * mixed by a Hadamard matrix, which makes every a_j a quarter of C.
@@ -38,6 +39,9 @@ final class ConcurrenceTangent {
   private static final int[] HADAMARD_SIGNS = {
     1, 1, 1, 1, 1, -1, 1, -1, 1, 1, -1, -1, 1, -1, -1, 1
   };
+
+  private static final Interval TWO = Interval.of(2);
+  private static final Interval HALF = Interval.of(0.5);
 
   private final ComplexBall z;
   private final ComplexBall inverse;
@@ -147,22 +151,24 @@ final class ConcurrenceTangent {
     if (!(least > 0)) {
       return Double.POSITIVE_INFINITY;
     }
-    Interval q = Interval.of(Rounding.divideUp(Rounding.addUp(distance, offset), least));
+    Interval reach = Interval.of(Rounding.addUp(distance, offset));
+    Interval m = Interval.of(least);
+    Interval q = reach.dividedBy(m);
     Interval k = Interval.ONE;
-    Interval h = Interval.of(0.5);
+    Interval h = HALF;
     if (q.upper() < 1) {
       Interval root = Interval.ONE.minus(q).sqrt();
       k = Interval.ONE.dividedBy(Interval.ONE.plus(root));
-      Interval half = q.times(Interval.of(0.5));
-      h = Interval.of(0.25).dividedBy(Interval.ONE.minus(half).plus(root));
+      h = Interval.of(0.25).dividedBy(Interval.ONE.minus(q.times(HALF)).plus(root));
     }
     Interval l = Interval.of(largest);
-    Interval k2 = k.square();
-    Interval first = Interval.of(w.mostTheta).times(l).times(Interval.of(2).times(h).plus(k2));
-    Interval row = Interval.of(2).times(Interval.of(w.longestRow)).plus(l.times(k).times(q));
-    Interval second =
-        row.square().times(k2).dividedBy(Interval.of(2).times(Interval.of(w.leastAlpha)));
-    return q.square().times(first.plus(second)).upper();
+    Interval kv = k.times(reach).dividedBy(m.sqrt());
+    Interval curved = TWO.times(h).times(l.dividedBy(m).sqrt()).times(reach.square().dividedBy(m));
+    Interval moduli = TWO.times(l.sqrt()).times(kv).plus(kv.square()).square();
+    return Interval.of(w.mostTheta)
+        .times(curved.plus(kv.square()))
+        .plus(moduli.dividedBy(TWO.times(Interval.of(w.leastAlpha))))
+        .upper();
   }
 
   /** The numbers alpha_j, theta_j and what the remainder needs of them. */
@@ -172,7 +178,6 @@ final class ConcurrenceTangent {
     private double thetaError;
     private double mostTheta;
     private double leastAlpha = Double.POSITIVE_INFINITY;
-    private double longestRow;
     private Interval constant = Interval.ZERO;
 
     Weights(ComplexBall t) {
@@ -183,25 +188,14 @@ final class ConcurrenceTangent {
         Interval y = OperatorArithmetic.around(a.im(j, j), t.radius());
         Interval modulus = x.square().plus(y.square());
         Interval place = Interval.of(alpha);
-        constant =
-            constant.plus(place.square().minus(modulus).dividedBy(Interval.of(2).times(place)));
+        constant = constant.plus(place.square().minus(modulus).dividedBy(TWO.times(place)));
         re[5 * j] = a.re(j, j) / alpha;
         im[5 * j] = -a.im(j, j) / alpha;
         double error = Rounding.addUp(Rounding.divideUp(t.radius(), alpha), Rounding.gamma(4));
         thetaError = Rounding.addUp(thetaError, error);
         mostTheta = Math.max(mostTheta, modulus.sqrt().dividedBy(place).upper());
         leastAlpha = Math.min(leastAlpha, alpha);
-        longestRow = Math.max(longestRow, Rounding.addUp(rowUp(a, j), t.radius()));
       }
-    }
-
-    private static double rowUp(ComplexMatrix a, int row) {
-      double[] parts = new double[8];
-      for (int k = 0; k < 4; k++) {
-        parts[k] = a.re(row, k);
-        parts[4 + k] = a.im(row, k);
-      }
-      return Rounding.normUp(parts);
     }
 
     /** The diagonal matrix of the theta_j. */

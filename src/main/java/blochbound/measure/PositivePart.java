@@ -62,10 +62,10 @@ final class PositivePart {
     if (e > Math.min(leastPositive, leastNegative)) {
       return linear;
     }
-    double gap = Rounding.addDown(Math.max(leastPositive, leastNegative), -e);
-    if (gap == Double.POSITIVE_INFINITY) {
+    if (Math.max(leastPositive, leastNegative) == Double.POSITIVE_INFINITY) {
       return 0;
     }
+    double gap = Rounding.addDown(Math.max(leastPositive, leastNegative), -e);
     double quadratic =
         gap > 0 ? Rounding.divideUp(Rounding.timesUp(e, e), 2 * gap) : Double.POSITIVE_INFINITY;
     return Math.min(linear, quadratic);

@@ -42,9 +42,10 @@ final class WitnessAscent {
     double form = form(a);
     for (int k = 0; k < MOST_STEPS; k++) {
       fillDirections(a);
-      if (gradientSize() <= FLAT || !solve(form)) {
+      if (gradientSize() <= FLAT || !factorise(form)) {
         break;
       }
+      solve();
       System.arraycopy(a.re, 0, backRe, 0, 4);
       System.arraycopy(a.im, 0, backIm, 0, 4);
       double next = move(a) ? form(a) : Double.POSITIVE_INFINITY;
@@ -122,8 +123,8 @@ final class WitnessAscent {
     return size;
   }
 
-  /** Solves the Newton equation by Cholesky; false when the form is not convex here. */
-  private boolean solve(double form) {
+  /** Factorises the Hessian by Cholesky; false when the form is not convex here. */
+  private boolean factorise(double form) {
     for (int k = 0; k < 6; k++) {
       for (int l = 0; l <= k; l++) {
         double sum = inner(k, l) + (k == l ? (k < 3 ? form : -form) : 0);
@@ -140,6 +141,11 @@ final class WitnessAscent {
         }
       }
     }
+    return true;
+  }
+
+  /** Turns half the negative gradient into the Newton step. */
+  private void solve() {
     for (int k = 0; k < 6; k++) {
       for (int r = 0; r < k; r++) {
         step[k] -= hessian[k][r] * step[r];
@@ -152,7 +158,6 @@ final class WitnessAscent {
       }
       step[k] /= hessian[k][k];
     }
-    return true;
   }
 
   /** Replaces A by A B for the step, cut to length one. */

@@ -40,7 +40,16 @@ public record Ball(Norm norm, BigDecimal radius, List<Correlation> correlations)
    * @param second index of the second parameter
    * @param value correlation coefficient, strictly between -1 and 1
    */
-  public record Correlation(int first, int second, BigDecimal value) {}
+  public record Correlation(int first, int second, BigDecimal value) {
+    /** Checks that two parameters are named and that they may differ. */
+    public Correlation {
+      Check.that(first != second, "a correlation is between two different parameters");
+      Check.that(
+          value.abs().compareTo(BigDecimal.ONE) < 0,
+          "a correlation lies strictly between -1 and 1; parameters that always move together are"
+              + " one shared parameter");
+    }
+  }
 
   /** Copies the list and checks the radius. */
   public Ball {

@@ -75,28 +75,29 @@ public final class OperatorForm {
 
   /** Multiple with a scalar expression. */
   public OperatorForm times(Scalar factor) {
-    OperatorForm sum = zero(dimension);
-    for (Map.Entry<Monomial, ComplexBall> e : terms.entrySet()) {
-      Scalar product = Scalar.term(e.getKey(), Coefficient.ONE).times(factor);
-      TreeMap<Monomial, ComplexBall> part = new TreeMap<>();
-      product.terms().forEach((m, c) -> part.put(m, e.getValue().times(c.enclosure())));
-      sum = sum.plus(new OperatorForm(dimension, part));
-    }
-    return sum;
+    TreeMap<Monomial, ComplexBall> sum = new TreeMap<>();
+    terms.forEach(
+        (m, matrix) -> addMultiples(sum, matrix, Scalar.term(m, Coefficient.ONE).times(factor)));
+    return new OperatorForm(dimension, sum);
   }
 
   /** Operator product. */
   public OperatorForm times(OperatorForm other) {
-    OperatorForm sum = zero(dimension);
+    TreeMap<Monomial, ComplexBall> sum = new TreeMap<>();
     for (Map.Entry<Monomial, ComplexBall> a : terms.entrySet()) {
       for (Map.Entry<Monomial, ComplexBall> b : other.terms.entrySet()) {
         Scalar monomials =
             Scalar.term(a.getKey(), Coefficient.ONE)
                 .times(Scalar.term(b.getKey(), Coefficient.ONE));
-        sum = sum.plus(constant(a.getValue().times(b.getValue())).times(monomials));
+        addMultiples(sum, a.getValue().times(b.getValue()), monomials);
       }
     }
-    return sum;
+    return new OperatorForm(dimension, sum);
+  }
+
+  private static void addMultiples(
+      Map<Monomial, ComplexBall> sum, ComplexBall matrix, Scalar factor) {
+    factor.terms().forEach((m, c) -> sum.merge(m, matrix.times(c.enclosure()), ComplexBall::plus));
   }
 
   /** Tells whether every matrix may be Hermitian within its error bound. */

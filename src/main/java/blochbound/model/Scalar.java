@@ -100,14 +100,17 @@ public final class Scalar {
 
   /** Product; even powers of a square root become powers of its argument. */
   public Scalar times(Scalar other) {
-    Scalar sum = ZERO;
+    TreeMap<Monomial, Coefficient> sum = new TreeMap<>();
     for (Map.Entry<Monomial, Coefficient> a : terms.entrySet()) {
       for (Map.Entry<Monomial, Coefficient> b : other.terms.entrySet()) {
-        sum =
-            sum.plus(normal(a.getKey().times(b.getKey())).scaled(a.getValue().times(b.getValue())));
+        normal(a.getKey().times(b.getKey()))
+            .scaled(a.getValue().times(b.getValue()))
+            .terms
+            .forEach((m, c) -> sum.merge(m, c, Coefficient::plus));
       }
     }
-    return sum;
+    sum.values().removeIf(Coefficient::isZero);
+    return new Scalar(sum);
   }
 
   private Scalar scaled(Coefficient factor) {
@@ -189,7 +192,7 @@ public final class Scalar {
     return constant(
         value.lower() == value.upper()
             ? Coefficient.of(ExactNumber.of(new java.math.BigDecimal(value.lower())))
-            : Coefficient.of(value));
+            : Coefficient.of(value, function + "(" + constantTerm().name() + ")"));
   }
 
   /** Value at the parameters {@code p}, rounded. */
@@ -277,30 +280,37 @@ public final class Scalar {
           if (f.function() == Function.SQRT) {
             found.add(new Domain(Condition.NONNEGATIVE, f.argument()));
           }
-          if (f.function() == Function.RECIPROCAL
-              || (f.function() == Function.SQRT && e.getValue() < 0)) {
-            found.add(new Domain(Condition.NONZERO, f.argument()));
-          }
-        } else if (e.getValue() < 0) {
-          found.add(
-              new Domain(Condition.NONZERO, term(Monomial.of(e.getKey(), 1), Coefficient.ONE)));
         }
+        divisor(e.getKey(), e.getValue())
+            .ifPresent(zero -> found.add(new Domain(Condition.NONZERO, zero)));
       }
     }
     return found;
   }
 
+  /** What must not be zero for a power of an atom to be defined. */
+  private static Optional<Scalar> divisor(Atom atom, int exponent) {
+    boolean divides =
+        exponent < 0 || (atom instanceof FunctionAtom f && f.function() == Function.RECIPROCAL);
+    if (!divides) {
+      return Optional.empty();
+    }
+    if (atom instanceof FunctionAtom f) {
+      // The exponential has no zero; a sine or cosine stands for itself.
+      return switch (f.function()) {
+        case EXP -> Optional.empty();
+        case SQRT, RECIPROCAL -> Optional.of(f.argument());
+        case SIN, COS -> Optional.of(term(Monomial.of(atom, 1), Coefficient.ONE));
+      };
+    }
+    return Optional.of(term(Monomial.of(atom, 1), Coefficient.ONE));
+  }
+
   /** Text that names the expression uniquely. */
   public String key() {
     return terms.entrySet().stream()
-        .map(e -> coefficientKey(e.getValue()) + "*" + e.getKey().key())
+        .map(e -> e.getValue().name() + "*" + e.getKey().key())
         .collect(Collectors.joining("+"));
-  }
-
-  private static String coefficientKey(Coefficient c) {
-    return c.exact()
-        .map(x -> x.ratio() + (x.piPower() == 0 ? "" : "pi^" + x.piPower()))
-        .orElseGet(() -> c.enclosure().lower() + ".." + c.enclosure().upper());
   }
 
   @Override

@@ -15,7 +15,8 @@ import org.apache.commons.math3.fraction.BigFraction;
  *
  * <p>Affine expressions are decided in exact arithmetic, so that a rate range may touch zero;
  * others by interval arithmetic over bisected boxes. A box that crosses the rim of the ball counts
- * as if it were inside.
+ * as if it were inside. The expression must be defined on the whole ball: its {@link
+ * Scalar#conditions()} are proved first, inner ones before outer ones.
  */
 public final class SignProof {
   private static final int MOST_BOXES = 4096;
@@ -73,11 +74,11 @@ public final class SignProof {
     ExactNumber[] reach = new ExactNumber[m];
     for (int i = 0; i < space.parameters().size(); i++) {
       ExactNumber slope = form.get().get(i + 1).times(space.parameters().get(i).unit().factor());
-      ExactNumber part = slope.times(new ExactNumber(space.centreFraction(i), 0));
+      ExactNumber part = slope.times(space.exactCentre(i));
       middle = middle.flatMap(sum -> sum.plus(part));
       int j = space.coordinateOf(i);
       if (j >= 0) {
-        reach[j] = slope.times(new ExactNumber(space.halfWidth(i), 0));
+        reach[j] = slope.times(space.halfWidth(i));
       }
     }
     if (middle.isEmpty()) {
@@ -143,6 +144,7 @@ public final class SignProof {
 
   private static Outcome byBisection(Scalar expression, ParameterSpace space, Claim claim) {
     int m = space.coordinates();
+    Interval[] whole = space.ranges();
     double[] low = new double[m];
     double[] high = new double[m];
     java.util.Arrays.fill(low, -1);
@@ -157,10 +159,13 @@ public final class SignProof {
       for (int j = 0; j < m; j++) {
         centre[j] = 0.5 * (box[0][j] + box[1][j]);
       }
-      Interval range = expression.enclosure(ranges(space, box));
+      Optional<Interval[]> ranges = ranges(space, whole, box);
+      if (ranges.isEmpty() || outside(box, space.norm())) {
+        continue;
+      }
+      Interval range = expression.enclosure(ranges.get());
       range = sign > 0 ? range : range.negate();
-      boolean holds = claim == Claim.NONNEGATIVE ? range.lower() >= 0 : range.lower() > 0;
-      if (holds || outside(box, space.norm())) {
+      if (claim == Claim.NONNEGATIVE ? range.lower() >= 0 : range.lower() > 0) {
         continue;
       }
       double value = expression.value(space.parametersAt(centre));
@@ -203,9 +208,10 @@ public final class SignProof {
     return parts;
   }
 
-  private static Interval[] ranges(ParameterSpace space, double[][] box) {
+  /** Parameter ranges over the part of a box that lies in the ball; empty when there is none. */
+  private static Optional<Interval[]> ranges(
+      ParameterSpace space, Interval[] whole, double[][] box) {
     Interval[] ranges = new Interval[space.parameters().size()];
-    Interval[] whole = space.ranges();
     for (int i = 0; i < ranges.length; i++) {
       int j = space.coordinateOf(i);
       Interval range = space.centre(i);
@@ -214,13 +220,15 @@ public final class SignProof {
           range = range.plus(space.slope(j, k).times(Interval.of(box[0][k], box[1][k])));
         }
         // The exact ends of the whole range keep a zero end at zero.
-        range =
-            Interval.of(
-                Math.max(range.lower(), whole[i].lower()),
-                Math.min(range.upper(), whole[i].upper()));
+        double low = Math.max(range.lower(), whole[i].lower());
+        double high = Math.min(range.upper(), whole[i].upper());
+        if (low > high) {
+          return Optional.empty();
+        }
+        range = Interval.of(low, high);
       }
       ranges[i] = range;
     }
-    return ranges;
+    return Optional.of(ranges);
   }
 }

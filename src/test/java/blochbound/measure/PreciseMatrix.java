@@ -12,6 +12,7 @@ import java.math.MathContext;
 final class PreciseMatrix {
   static final MathContext DIGITS = new MathContext(50);
   private static final BigDecimal TWO = BigDecimal.valueOf(2);
+  private static final BigDecimal NOTHING = new BigDecimal("1e-70");
   private static final BigDecimal SMALL = new BigDecimal("1e-45");
 
   final int rows;
@@ -174,6 +175,11 @@ final class PreciseMatrix {
     return true;
   }
 
+  /** Rounds to 50 digits; what is below 1e-70 is zero, or its scale would slow every later sum. */
+  private static BigDecimal tidy(BigDecimal value) {
+    return value.abs().compareTo(NOTHING) < 0 ? BigDecimal.ZERO : value.round(DIGITS);
+  }
+
   private static void rotateColumns(
       PreciseMatrix x, int p, int q, BigDecimal c, BigDecimal sRe, BigDecimal sIm) {
     for (int k = 0; k < x.rows; k++) {
@@ -181,10 +187,10 @@ final class PreciseMatrix {
       BigDecimal b = x.im[k][p];
       BigDecimal e = x.re[k][q];
       BigDecimal f = x.im[k][q];
-      x.re[k][p] = c.multiply(a).subtract(sRe.multiply(e)).subtract(sIm.multiply(f)).round(DIGITS);
-      x.im[k][p] = c.multiply(b).subtract(sRe.multiply(f)).add(sIm.multiply(e)).round(DIGITS);
-      x.re[k][q] = sRe.multiply(a).subtract(sIm.multiply(b)).add(c.multiply(e)).round(DIGITS);
-      x.im[k][q] = sRe.multiply(b).add(sIm.multiply(a)).add(c.multiply(f)).round(DIGITS);
+      x.re[k][p] = tidy(c.multiply(a).subtract(sRe.multiply(e)).subtract(sIm.multiply(f)));
+      x.im[k][p] = tidy(c.multiply(b).subtract(sRe.multiply(f)).add(sIm.multiply(e)));
+      x.re[k][q] = tidy(sRe.multiply(a).subtract(sIm.multiply(b)).add(c.multiply(e)));
+      x.im[k][q] = tidy(sRe.multiply(b).add(sIm.multiply(a)).add(c.multiply(f)));
     }
   }
 
@@ -195,10 +201,10 @@ final class PreciseMatrix {
       BigDecimal b = x.im[p][k];
       BigDecimal e = x.re[q][k];
       BigDecimal f = x.im[q][k];
-      x.re[p][k] = c.multiply(a).subtract(sRe.multiply(e)).add(sIm.multiply(f)).round(DIGITS);
-      x.im[p][k] = c.multiply(b).subtract(sRe.multiply(f)).subtract(sIm.multiply(e)).round(DIGITS);
-      x.re[q][k] = sRe.multiply(a).add(sIm.multiply(b)).add(c.multiply(e)).round(DIGITS);
-      x.im[q][k] = sRe.multiply(b).subtract(sIm.multiply(a)).add(c.multiply(f)).round(DIGITS);
+      x.re[p][k] = tidy(c.multiply(a).subtract(sRe.multiply(e)).add(sIm.multiply(f)));
+      x.im[p][k] = tidy(c.multiply(b).subtract(sRe.multiply(f)).subtract(sIm.multiply(e)));
+      x.re[q][k] = tidy(sRe.multiply(a).add(sIm.multiply(b)).add(c.multiply(e)));
+      x.im[q][k] = tidy(sRe.multiply(b).subtract(sIm.multiply(a)).add(c.multiply(f)));
     }
   }
 }

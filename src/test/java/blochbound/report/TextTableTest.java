@@ -13,6 +13,8 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 
 class TextTableTest {
+  private static final List<Align> ALIGNMENTS = List.of(Align.values());
+
   // [invariant] the cells given, laid out by hand
   @Test
   void pointsStandBelowEachOther() {
@@ -53,7 +55,7 @@ class TextTableTest {
     for (int i = 0; i < 50; i++) {
       Column[] columns = new Column[random.nextInt(1, 12)];
       for (int j = 0; j < columns.length; j++) {
-        columns[j] = new Column(text(random), Align.values()[random.nextInt(3)]);
+        columns[j] = new Column(text(random), ALIGNMENTS.get(random.nextInt(3)));
       }
       TextTable table = TextTable.of(columns);
       for (int row = 0; row < 4; row++) {
