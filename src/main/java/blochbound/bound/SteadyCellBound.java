@@ -134,7 +134,7 @@ public final class SteadyCellBound implements CellBound {
           sign > 0 ? located.measure().lowerBounds(near) : located.measure().upperBounds(near);
       for (AffineBound candidate :
           candidates.subList(0, Math.min(MOST_CANDIDATES, candidates.size()))) {
-        if (lower >= enough || isKnown(candidate)) {
+        if (lower >= enough || isKnown(candidate) || isConstant(candidate.operator())) {
           continue;
         }
         double slack = candidate.excess().applyAsDouble(candidate.isGlobal() ? 0 : distance(near));
@@ -170,6 +170,11 @@ public final class SteadyCellBound implements CellBound {
       for (int j = 0; j < loss.length && sum > 0 && Double.isFinite(slack); j++) {
         loss[j] += slack * distances.reach()[j] / sum;
       }
+    }
+
+    /** Constant bounds say no more than the range of the measure. */
+    private boolean isConstant(Hermitian operator) {
+      return operator.equals(Hermitian.identity(operator.size()).scale(operator.re(0, 0)));
     }
 
     /** Measures that are affine themselves offer the same operator everywhere. */
