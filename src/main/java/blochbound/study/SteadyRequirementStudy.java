@@ -165,9 +165,7 @@ final class SteadyRequirementStudy {
 
   private Guarantee guarantee(BranchOutcome outcome) {
     String method =
-        outcome.regions() == 1
-            ? "dual observable, one region"
-            : "dual-observable branch and bound";
+        outcome.regions() == 1 ? "dual observable, one region" : "dual-observable branch and bound";
     // The bound is rounded to the safe side on its way into the requirement's unit.
     Interval inUnit = Interval.of(sign * outcome.certifiedLower()).dividedBy(unit);
     double value = sign > 0 ? inUnit.lower() : inUnit.upper();
@@ -207,8 +205,7 @@ final class SteadyRequirementStudy {
                         m.mean() / factor,
                         m.quantiles().stream()
                             .map(
-                                q ->
-                                    new SampledTruth.Quantile(q.probability(), q.value() / factor))
+                                q -> new SampledTruth.Quantile(q.probability(), q.value() / factor))
                             .toList())));
   }
 }
