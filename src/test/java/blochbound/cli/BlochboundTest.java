@@ -261,8 +261,7 @@ class BlochboundTest {
     assertTrue(command.err().contains("Did you mean certify?"), command.err());
     InProcess argument = InProcess.run("show", "certified", "refuted");
     assertEquals(2, argument.code());
-    assertTrue(
-        argument.err().startsWith("blochbound: surplus argument `refuted`"), argument.err());
+    assertTrue(argument.err().startsWith("blochbound: surplus argument `refuted`"), argument.err());
   }
 
   @Test

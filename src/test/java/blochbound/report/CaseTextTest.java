@@ -141,8 +141,7 @@ class CaseTextTest {
     assertTrue(
         json.contains("\"rate\": \"pump\",\n      \"operator\": [\n        \"|e><g|\""), json);
     assertTrue(json.contains("\"target\": null"), json);
-    assertTrue(
-        json.contains("\"moment\": \"in every steady state\",\n      \"nominal\": null"), json);
+    assertTrue(json.contains("\"moment\": \"in every device\",\n      \"nominal\": null"), json);
   }
 
   @Test
