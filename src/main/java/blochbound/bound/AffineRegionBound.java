@@ -103,6 +103,10 @@ final class AffineRegionBound {
 
   private double refined(int a, double frobenius) {
     double[] s = kernel.remainder(a);
+    if (a == 0) {
+      // What a singular centre leaves over does not shrink with the region: it must be sharp.
+      return Math.min(frobenius, Math.max(0, -norms.smallestEigenvalueDown(s, frobenius)));
+    }
     return table.isEven(a) ? norms.negativePartUp(s, frobenius) : norms.spectralUp(s, frobenius);
   }
 

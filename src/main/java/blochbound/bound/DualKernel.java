@@ -252,7 +252,8 @@ final class DualKernel {
    * error of M_j            sum_j (|mu_j| + r_j) e_j sum_a |Y_a|
    * </pre>
    *
-   * <p>q counts the products of the longest column, every addition into one S_a and a few scalings.
+   * <p>q counts every product and addition that may go into one entry of one S_a, and a few
+   * scalings.
    */
   double errorUp(double[] witness) {
     double trial = Rounding.inflate(sumOfY, size + solved + 8L);
@@ -264,7 +265,7 @@ final class DualKernel {
       TaylorModel coefficient = expansion().coefficient(j);
       double sum = coefficient.sumUp();
       double rest = coefficient.remainder();
-      operations += coefficient.size() + term.matrix().longestColumn();
+      operations += coefficient.size() * (term.matrix().longestColumn() + 2L);
       rounding += sum * frobenius[j] * trial;
       double gamma = Rounding.gamma(term.matrix().longestColumn() + 2L);
       double most = frobenius[j] * trial;

@@ -124,9 +124,10 @@ final class PolynomialRange {
       boolean separable = factors.length < 2 || (factors.length == 2 && factors[0] == factors[1]);
       value -= separable ? 0 : Math.abs(reduced[a]);
     }
-    // All sums together have fewer than 4 count + 8 m roundings of parts of the same size.
-    return Rounding.addDown(
-        value, -Rounding.timesUp(Rounding.gamma(4L * count + 8L * m + 16), 2 * size));
+    // Reduction, sums and a derivative whose sign rounding got wrong each cost at most a few times
+    // gamma_count of the sum of all sizes.
+    double rounding = Rounding.gamma(16L * count + 16L * m + 16);
+    return Rounding.addDown(value, -Rounding.timesUp(rounding, 2 * size));
   }
 
   /** Minimum of g x + q x^2 over [-1, 1]. */

@@ -63,4 +63,10 @@ final class RemainderNorms {
     double best = Math.min(plain, Math.max(0, shifted + rounding)) + transformError * frobenius;
     return Math.min(frobenius, Rounding.inflate(best, 4));
   }
+
+  /** Lower bound of the smallest eigenvalue, from a full decomposition: sharp, but slower. */
+  double smallestEigenvalueDown(double[] coordinates, double frobenius) {
+    double smallest = basis.matrix(coordinates).eigen().smallest().lower();
+    return Rounding.addDown(smallest, -Rounding.timesUp(transformError, frobenius));
+  }
 }

@@ -73,7 +73,7 @@ public final class SteadyCellBound implements CellBound {
   /** An order K that suits the size: higher orders pay when the factorisation is the main cost. */
   public static int suitableOrder(BlochGenerator generator) {
     int m = generator.space().coordinates();
-    double work = 4e5 * Math.max(1, generator.basis().size() / 256.0);
+    double work = 6e5 * Math.max(1, generator.basis().size() / 256.0);
     int order = 1;
     while (order < 4
         && MultiIndexTable.count(m, order + 1 + generator.degree())
@@ -134,7 +134,7 @@ public final class SteadyCellBound implements CellBound {
           sign > 0 ? located.measure().lowerBounds(near) : located.measure().upperBounds(near);
       for (AffineBound candidate :
           candidates.subList(0, Math.min(MOST_CANDIDATES, candidates.size()))) {
-        if (lower >= enough || isKnown(candidate)) {
+        if (lower >= enough || isKnown(candidate) || isConstant(candidate.operator())) {
           continue;
         }
         double slack = candidate.excess().applyAsDouble(candidate.isGlobal() ? 0 : distance(near));
@@ -162,12 +162,19 @@ public final class SteadyCellBound implements CellBound {
       return witness.map(w -> value - sign * w.inner(state)).orElse(Double.POSITIVE_INFINITY);
     }
 
-    /** Adds the slack of a local bound to the losses, by how far each coordinate moves the state. */
+    /**
+     * Adds the slack of a local bound to the losses, by how far each coordinate moves the state.
+     */
     private void shareOut(double slack) {
       double sum = java.util.Arrays.stream(distances.reach()).sum();
       for (int j = 0; j < loss.length && sum > 0 && Double.isFinite(slack); j++) {
         loss[j] += slack * distances.reach()[j] / sum;
       }
+    }
+
+    /** Constant bounds say no more than the range of the measure. */
+    private boolean isConstant(Hermitian operator) {
+      return operator.equals(Hermitian.identity(operator.size()).scale(operator.re(0, 0)));
     }
 
     /** Measures that are affine themselves offer the same operator everywhere. */
@@ -182,9 +189,13 @@ public final class SteadyCellBound implements CellBound {
 
     Cell cell(double[] candidate, double value) {
       int split = -1;
+      double most = -1;
       for (int j = 0; j < loss.length; j++) {
-        if (region.halfWidth(j) > 0 && (split < 0 || loss[j] > loss[split])) {
+        // Without a finite loss the widest side is halved.
+        double gain = Double.isFinite(loss[j]) ? loss[j] : region.halfWidth(j);
+        if (region.halfWidth(j) > 0 && gain > most) {
           split = j;
+          most = gain;
         }
       }
       return new Cell(

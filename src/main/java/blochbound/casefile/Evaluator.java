@@ -226,12 +226,12 @@ final class Evaluator {
     boolean whole =
         exact
             .filter(x -> x.piPower() == 0)
-            .filter(x -> x.ratio().getDenominator().equals(java.math.BigInteger.ONE))
+            .filter(x -> x.denominator().equals(java.math.BigInteger.ONE))
             .isPresent();
     if (!whole) {
       throw passage.fault(node.at(), "an exponent must be a whole number; roots are sqrt( )");
     }
-    var size = exact.orElseThrow().ratio().getNumerator();
+    var size = exact.orElseThrow().numerator();
     if (size.abs().compareTo(java.math.BigInteger.valueOf(LARGEST_EXPONENT)) > 0) {
       throw passage.fault(
           node.at(), "an exponent must lie between -" + LARGEST_EXPONENT + " and 64");

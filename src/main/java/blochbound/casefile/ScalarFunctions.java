@@ -5,9 +5,7 @@ import blochbound.interval.ExactNumber;
 import blochbound.model.Atom.Function;
 import blochbound.model.Coefficient;
 import blochbound.model.Scalar;
-import java.math.BigInteger;
 import java.util.Optional;
-import org.apache.commons.math3.fraction.BigFraction;
 
 /** Reciprocal, square root, exponential, sine and cosine of numbers of one passage. */
 final class ScalarFunctions {
@@ -85,11 +83,13 @@ final class ScalarFunctions {
 
   /** The root when it is a fraction times a power of pi. */
   private static Optional<ExactNumber> exactRoot(ExactNumber x) {
-    BigInteger numerator = x.ratio().getNumerator().sqrt();
-    BigInteger denominator = x.ratio().getDenominator().sqrt();
-    BigFraction root = new BigFraction(numerator, denominator);
-    return root.multiply(root).equals(x.ratio()) && x.piPower() % 2 == 0
-        ? Optional.of(new ExactNumber(root, x.piPower() / 2))
-        : Optional.empty();
+    if (x.piPower() % 2 != 0) {
+      return Optional.empty();
+    }
+    ExactNumber root = ExactNumber.of(x.numerator().sqrt(), x.denominator().sqrt());
+    for (int k = 0; k < Math.abs(x.piPower()) / 2; k++) {
+      root = x.piPower() > 0 ? root.times(ExactNumber.PI) : root.dividedBy(ExactNumber.PI);
+    }
+    return root.times(root).equals(x) ? Optional.of(root) : Optional.empty();
   }
 }

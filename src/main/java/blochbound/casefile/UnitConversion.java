@@ -34,8 +34,8 @@ final class UnitConversion {
       return value;
     }
     ExactNumber factor = from.factor().dividedBy(to.factor());
-    BigDecimal numerator = new BigDecimal(factor.ratio().getNumerator());
-    BigDecimal denominator = new BigDecimal(factor.ratio().getDenominator());
+    BigDecimal numerator = new BigDecimal(factor.numerator());
+    BigDecimal denominator = new BigDecimal(factor.denominator());
     if (factor.piPower() == 0) {
       // Factors between units of one kind are powers of ten, so the quotient ends.
       return value.multiply(numerator).divide(denominator);

@@ -7,7 +7,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import org.apache.commons.math3.fraction.BigFraction;
 
 /**
  * The units that a case may use, with exact factors into its internal unit of time.
@@ -91,10 +90,7 @@ final class UnitTable {
   }
 
   private static ExactNumber powerOfTen(int exponent) {
-    BigFraction ten = new BigFraction(10);
-    return exponent >= 0
-        ? ExactNumber.of(BigDecimal.ONE.scaleByPowerOfTen(exponent))
-        : new ExactNumber(BigFraction.ONE.divide(ten.pow(-exponent)), 0);
+    return ExactNumber.of(BigDecimal.ONE.scaleByPowerOfTen(exponent));
   }
 
   private static Map<String, Integer> orderedTimes() {

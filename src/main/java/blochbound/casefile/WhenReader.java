@@ -1,5 +1,6 @@
 package blochbound.casefile;
 
+import blochbound.interval.ExactNumber;
 import blochbound.model.MeasureSpec;
 import blochbound.model.StateSpec;
 import blochbound.model.When;
@@ -109,6 +110,10 @@ final class WhenReader {
     return time;
   }
 
+  private static ExactNumber exact(Quantity time) {
+    return ExactNumber.of(time.value()).times(time.unit().factor());
+  }
+
   private When during(YamlNode node) {
     List<YamlNode> ends = node.asSequence("an interval of times as [5 us, 20 us]").items();
     if (ends.size() != 2) {
@@ -116,19 +121,10 @@ final class WhenReader {
     }
     Quantity from = time(ends.get(0).asScalar("a time"));
     Quantity until = time(ends.get(1).asScalar("a time"));
-    // Times have no factor of pi, so the exact quotient of the factors orders them.
-    int order =
-        from.unit()
-            .factor()
-            .ratio()
-            .multiply(blochbound.interval.ExactNumber.of(from.value()).ratio())
-            .compareTo(
-                until
-                    .unit()
-                    .factor()
-                    .ratio()
-                    .multiply(blochbound.interval.ExactNumber.of(until.value()).ratio()));
-    if (order > 0) {
+    // Times have no factor of pi, so that their difference is exact.
+    boolean isInOrder =
+        exact(until).plus(exact(from).negate()).map(length -> length.signum() >= 0).orElse(false);
+    if (!isInOrder) {
       throw FaultSignal.of(node.fault("the ends of `during` are in the wrong order"));
     }
     return new When.During(from.value(), from.unit(), until.value(), until.unit());

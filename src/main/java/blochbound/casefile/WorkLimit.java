@@ -136,8 +136,8 @@ final class WorkLimit {
   }
 
   private static boolean isShort(ExactNumber number) {
-    return number.ratio().getNumerator().bitLength() <= MOST_BITS
-        && number.ratio().getDenominator().bitLength() <= MOST_BITS
+    return number.numerator().bitLength() <= MOST_BITS
+        && number.denominator().bitLength() <= MOST_BITS
         && Math.abs(number.piPower()) <= 1000;
   }
 }

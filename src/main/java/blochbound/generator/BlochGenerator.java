@@ -141,8 +141,8 @@ public final class BlochGenerator {
   }
 
   /**
-   * Largest degree of a coefficient's expansion on a region: that of the monomial for polynomials up
-   * to {@link #LARGEST_DEGREE}, {@link #SMOOTH_DEGREE} for others; at least 1.
+   * Largest degree of a coefficient's expansion on a region: that of the monomial for polynomials
+   * up to {@link #LARGEST_DEGREE}, {@link #SMOOTH_DEGREE} for others; at least 1.
    */
   public int degree() {
     return Math.max(1, degree);

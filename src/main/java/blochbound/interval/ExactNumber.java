@@ -1,6 +1,7 @@
 package blochbound.interval;
 
 import java.math.BigDecimal;
+import java.math.BigInteger;
 import java.util.Optional;
 import org.apache.commons.math3.fraction.BigFraction;
 
@@ -36,12 +37,34 @@ public record ExactNumber(BigFraction ratio, int piPower) {
   /** The decimal number {@code value}. */
   public static ExactNumber of(BigDecimal value) {
     BigFraction unscaled = new BigFraction(value.unscaledValue());
-    BigFraction ten = new BigFraction(java.math.BigInteger.TEN);
+    BigFraction ten = new BigFraction(BigInteger.TEN);
     return new ExactNumber(
         value.scale() >= 0
             ? unscaled.divide(ten.pow(value.scale()))
             : unscaled.multiply(ten.pow(-value.scale())),
         0);
+  }
+
+  /**
+   * The fraction {@code numerator} / {@code denominator}.
+   *
+   * @throws ArithmeticException when the denominator is zero
+   */
+  public static ExactNumber of(BigInteger numerator, BigInteger denominator) {
+    if (denominator.signum() == 0) {
+      throw new ArithmeticException("division by zero");
+    }
+    return new ExactNumber(new BigFraction(numerator, denominator), 0);
+  }
+
+  /** Numerator of the reduced ratio, with the sign of the number. */
+  public BigInteger numerator() {
+    return ratio.getNumerator();
+  }
+
+  /** Denominator of the reduced ratio, positive. */
+  public BigInteger denominator() {
+    return ratio.getDenominator();
   }
 
   /** Sign of the number: -1, 0 or 1. */

@@ -26,9 +26,13 @@ final class Concurrence extends CertifiedMeasure {
     super(4);
   }
 
+  /** One workspace for each thread: values and bounds are asked for in hot loops. */
+  private static final ThreadLocal<ConcurrenceKernel> KERNEL =
+      ThreadLocal.withInitial(ConcurrenceKernel::new);
+
   @Override
   public double value(Hermitian state) {
-    return Math.max(0, new ConcurrenceKernel().signedSum(state));
+    return Math.max(0, KERNEL.get().signedSum(state));
   }
 
   /**
@@ -36,7 +40,7 @@ final class Concurrence extends CertifiedMeasure {
    */
   @Override
   public Hermitian gradient(Hermitian state) {
-    ConcurrenceKernel kernel = new ConcurrenceKernel();
+    ConcurrenceKernel kernel = KERNEL.get();
     if (!(kernel.prepare(state, 0) < MOST_INVERSE_TRACE)) {
       kernel.prepare(state, MIXTURES[MIXTURES.length - 1]);
     }
@@ -50,7 +54,7 @@ final class Concurrence extends CertifiedMeasure {
 
   @Override
   List<AffineBound> lowerWitnesses(Hermitian near) {
-    ConcurrenceKernel kernel = new ConcurrenceKernel();
+    ConcurrenceKernel kernel = KERNEL.get();
     WitnessAscent ascent = new WitnessAscent();
     ascent.prepare(near);
     List<AffineBound> bounds = new ArrayList<>(MIXTURES.length + 1);

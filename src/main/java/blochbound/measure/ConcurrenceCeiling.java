@@ -55,7 +55,7 @@ final class ConcurrenceCeiling {
   static ComplexBall flip() {
     double[] re = new double[16];
     for (int i = 0; i < 4; i++) {
-      re[4 * i + 3 - i] = TwoSiteFactor.SIGN[i];
+      re[4 * i + 3 - i] = TwoSiteFactor.sign(i);
     }
     return ComplexBall.exact(ComplexMatrix.of(4, 4, re, new double[16]));
   }

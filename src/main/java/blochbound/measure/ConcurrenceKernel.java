@@ -144,7 +144,7 @@ final class ConcurrenceKernel {
     }
   }
 
-  /** (left) S^T YY, where (S^T YY)_kj = SIGN_j S_(3-j)k. */
+  /** (left) S^T YY, where (S^T YY)_kj = sign(j) S_(3-j)k. */
   private void formProduct() {
     for (int i = 0; i < 4; i++) {
       for (int j = 0; j < 4; j++) {
@@ -156,8 +156,8 @@ final class ConcurrenceKernel {
           sumRe += leftRe[4 * i + k] * bRe - leftIm[4 * i + k] * bIm;
           sumIm += leftRe[4 * i + k] * bIm + leftIm[4 * i + k] * bRe;
         }
-        gRe[4 * i + j] = TwoSiteFactor.SIGN[j] * sumRe;
-        gIm[4 * i + j] = TwoSiteFactor.SIGN[j] * sumIm;
+        gRe[4 * i + j] = TwoSiteFactor.sign(j) * sumRe;
+        gIm[4 * i + j] = TwoSiteFactor.sign(j) * sumIm;
       }
     }
   }

@@ -9,8 +9,10 @@ import blochbound.linalg.Hermitian;
  * <p>Plain arrays, row-major, reused; not for several threads. Estimates: no error bound is given.
  */
 final class TwoSiteFactor {
-  /** YY = sigma_y x sigma_y has the entries SIGN[i] at (i, 3 - i). */
-  static final int[] SIGN = {-1, 1, 1, -1};
+  /** YY = sigma_y x sigma_y has the entries sign(i) at (i, 3 - i). */
+  static int sign(int i) {
+    return i == 0 || i == 3 ? -1 : 1;
+  }
 
   /** Pivots below this part of the trace are rounding noise of a singular state. */
   private static final double NOISE = 1e-15;
@@ -106,8 +108,8 @@ final class TwoSiteFactor {
         for (int i = 0; i < 4; i++) {
           int ia = 4 * i + a;
           int ib = 4 * (3 - i) + b;
-          sumRe += SIGN[i] * (sRe[ia] * sRe[ib] - sIm[ia] * sIm[ib]);
-          sumIm += SIGN[i] * (sRe[ia] * sIm[ib] + sIm[ia] * sRe[ib]);
+          sumRe += sign(i) * (sRe[ia] * sRe[ib] - sIm[ia] * sIm[ib]);
+          sumIm += sign(i) * (sRe[ia] * sIm[ib] + sIm[ia] * sRe[ib]);
         }
         tauRe[a * rank + b] = sumRe;
         tauRe[b * rank + a] = sumRe;

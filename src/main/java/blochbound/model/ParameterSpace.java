@@ -208,13 +208,13 @@ public final class ParameterSpace {
   }
 
   /** Exact half width of a parameter's range over the ball, in its own unit. */
-  public BigFraction halfWidth(int parameter) {
-    return halfWidth[parameter];
+  public ExactNumber halfWidth(int parameter) {
+    return new ExactNumber(halfWidth[parameter], 0);
   }
 
   /** Exact centre of a parameter's range over the ball, in its own unit. */
-  public BigFraction centreFraction(int parameter) {
-    return centre[parameter];
+  public ExactNumber exactCentre(int parameter) {
+    return new ExactNumber(centre[parameter], 0);
   }
 
   /** Nominal coordinates z; zero unless a box has an off-centre nominal value. */

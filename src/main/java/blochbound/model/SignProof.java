@@ -74,11 +74,11 @@ public final class SignProof {
     ExactNumber[] reach = new ExactNumber[m];
     for (int i = 0; i < space.parameters().size(); i++) {
       ExactNumber slope = form.get().get(i + 1).times(space.parameters().get(i).unit().factor());
-      ExactNumber part = slope.times(new ExactNumber(space.centreFraction(i), 0));
+      ExactNumber part = slope.times(space.exactCentre(i));
       middle = middle.flatMap(sum -> sum.plus(part));
       int j = space.coordinateOf(i);
       if (j >= 0) {
-        reach[j] = slope.times(new ExactNumber(space.halfWidth(i), 0));
+        reach[j] = slope.times(space.halfWidth(i));
       }
     }
     if (middle.isEmpty()) {

@@ -31,8 +31,11 @@ public final class LaneSolver {
   /** Most unknowns for which a pivot order is planned. */
   static final int LARGEST_PLANNED = 400;
 
-  /** Most factor entries: beyond, the lanes leave the caches and one device at a time is faster. */
+  /** Most factor entries, one kibibyte each: beyond, one device at a time is faster. */
   static final int MOST_ENTRIES = 32_768;
+
+  /** Unknowns up to which lanes are faster even without any sparsity. */
+  static final int ALWAYS_IN_LANES = 100;
 
   private static final int ONE_BY_ONE = 4;
 
@@ -52,7 +55,7 @@ public final class LaneSolver {
         generator,
         generator.unknowns() > LARGEST_PLANNED
             ? Optional.empty()
-            : LaneProgram.of(generator).filter(p -> p.entries() <= MOST_ENTRIES));
+            : LaneProgram.of(generator).filter(LaneSolver::paysOff));
   }
 
   /** Solver by a given program, or one device at a time without one. */
@@ -66,6 +69,13 @@ public final class LaneSolver {
     states = new double[generator.unknowns() + 1][lanes()];
     unique = new boolean[lanes()];
     Arrays.fill(states[0], 1 / Math.sqrt(generator.basis().levels()));
+  }
+
+  /** Tells whether lanes are faster than one device at a time; the limits are measured. */
+  private static boolean paysOff(LaneProgram program) {
+    double n = program.size();
+    return program.entries() <= MOST_ENTRIES
+        && (n <= ALWAYS_IN_LANES || 2.0 * program.left().length <= n * n * n / 3);
   }
 
   /** Another workspace with the same plan, for another thread. */

@@ -32,29 +32,33 @@ record CmaEs(BallProjection ball, int population) {
    */
   void run(Evaluator evaluator, double[] start, int kept, SplittableRandom random) {
     int m = start.length;
-    CMAESOptimizer optimizer =
-        new CMAESOptimizer(
-            Integer.MAX_VALUE,
-            Double.NEGATIVE_INFINITY,
-            true,
-            0,
-            1,
-            new Well19937c(random.nextLong()),
-            false,
-            new SimplePointChecker<>(1e-9, 1e-9));
     try {
-      optimizer.optimize(
-          new MaxEval(Integer.MAX_VALUE),
-          GoalType.MINIMIZE,
-          new ObjectiveFunction(z -> charged(evaluator, z, kept)),
-          new InitialGuess(start),
-          new SimpleBounds(filled(m, -1), filled(m, 1)),
-          new CMAESOptimizer.Sigma(filled(m, 0.5)),
-          new CMAESOptimizer.PopulationSize(population));
+      optimizer(random.nextLong())
+          .optimize(
+              new MaxEval(Integer.MAX_VALUE),
+              GoalType.MINIMIZE,
+              new ObjectiveFunction(z -> charged(evaluator, z, kept)),
+              new InitialGuess(start),
+              new SimpleBounds(filled(m, -1), filled(m, 1)),
+              new CMAESOptimizer.Sigma(filled(m, 0.5)),
+              new CMAESOptimizer.PopulationSize(population));
     } catch (BudgetSpent end) {
       // The evaluator holds the best point, so nothing is lost.
       return;
     }
+  }
+
+  private static CMAESOptimizer optimizer(long seed) {
+    // Full covariances, adapted actively; a draw outside the box is drawn once more, then cut.
+    return new CMAESOptimizer(
+        Integer.MAX_VALUE,
+        Double.NEGATIVE_INFINITY,
+        true,
+        0,
+        1,
+        new Well19937c(seed),
+        false,
+        new SimplePointChecker<>(1e-9, 1e-9));
   }
 
   /** Population size that Hansen recommends as the smallest for m coordinates. */

@@ -14,6 +14,7 @@ final class Evaluator {
   private double firstValue = Double.NaN;
   private double bestValue = Double.POSITIVE_INFINITY;
   private double[] bestPoint = {};
+  private double steepestSlope;
   private Ending ending = Ending.SETTLED;
 
   Evaluator(Objective objective, Budget budget) {
@@ -35,6 +36,7 @@ final class Evaluator {
     double value = record(z, objective.value(z, gradient));
     for (int j = 0; j < gradient.length; j++) {
       gradient[j] = Double.isFinite(gradient[j]) && Double.isFinite(value) ? gradient[j] : 0;
+      steepestSlope = Math.max(steepestSlope, Math.abs(gradient[j]));
     }
     return value;
   }
@@ -83,6 +85,11 @@ final class Evaluator {
   /** Evaluations left. */
   int left() {
     return budget.evaluations() - count;
+  }
+
+  /** Largest size of a gradient entry seen. */
+  double steepestSlope() {
+    return steepestSlope;
   }
 
   /** Value at the first point. */

@@ -27,7 +27,7 @@ record LocalSearch(BallProjection ball) {
   /** Steps below this length, in coordinates of the unit ball, count as none. */
   private static final double SHORTEST_STEP = 1e-10;
 
-  /** Share of the first gradient below which a projected gradient counts as zero. */
+  /** Share of the steepest slope below which a projected gradient counts as zero. */
   private static final double FLAT = 1e-6;
 
   /** Slopes below this one count as zero, so that its inverse is a number. */
@@ -39,11 +39,18 @@ record LocalSearch(BallProjection ball) {
   /** Runs from the start, moved into the ball; the evaluator holds the best point. */
   void run(Evaluator evaluator, double[] start) {
     Iterate at = Iterate.at(evaluator, ball.project(start));
-    double slope = Iterate.largest(at.gradient());
-    if (!Double.isFinite(at.value()) || slope < SMALLEST_SLOPE) {
+    if (!Double.isFinite(at.value()) || Iterate.largest(at.gradient()) < SMALLEST_SLOPE) {
       return;
     }
-    double step = 1 / slope;
+    Iterate end = spectralDescent(evaluator, at);
+    if (!isStationary(end, evaluator.steepestSlope())) {
+      new BundleDescent(ball).run(evaluator, end);
+    }
+  }
+
+  private Iterate spectralDescent(Evaluator evaluator, Iterate start) {
+    Iterate at = start;
+    double step = 1 / Iterate.largest(at.gradient());
     double[] recent = new double[MEMORY];
     Arrays.fill(recent, at.value());
     Progress progress = new Progress(evaluator.count(), at.value());
@@ -53,7 +60,6 @@ record LocalSearch(BallProjection ball) {
         break;
       }
       step = spectralStep(at, next);
-      slope = Math.max(slope, Iterate.largest(next.gradient()));
       at = next;
       recent[i % MEMORY] = at.value();
       if (i % WINDOW == 0) {
@@ -63,9 +69,7 @@ record LocalSearch(BallProjection ball) {
         progress = new Progress(evaluator.count(), evaluator.bestValue());
       }
     }
-    if (!isStationary(at, slope)) {
-      new BundleDescent(ball).run(evaluator, at);
-    }
+    return at;
   }
 
   /** Where a window of iterations began. */
@@ -120,7 +124,7 @@ record LocalSearch(BallProjection ball) {
     return Math.min(longest, Iterate.inner(s, s) / curvature);
   }
 
-  /** Whether a step along the gradient of the length of the ball would hardly move the point. */
+  /** Whether a gradient step, scaled to length 1 where it is steepest, hardly moves the point. */
   private boolean isStationary(Iterate at, double slope) {
     double[] moved = ball.project(at.descended(1 / slope));
     return Iterate.largest(Iterate.difference(moved, at.x())) <= FLAT;

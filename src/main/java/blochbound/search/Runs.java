@@ -1,6 +1,7 @@
 package blochbound.search;
 
 import blochbound.search.SearchResult.Ending;
+import java.time.Duration;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.ExecutionException;
@@ -9,6 +10,7 @@ import java.util.concurrent.Executors;
 import java.util.concurrent.Future;
 import java.util.concurrent.atomic.AtomicInteger;
 import java.util.concurrent.atomic.AtomicReferenceArray;
+import java.util.function.IntConsumer;
 import java.util.function.Supplier;
 import org.jspecify.annotations.Nullable;
 
@@ -31,7 +33,7 @@ final class Runs {
     threads = options.threads();
     // Durations beyond some centuries would overflow.
     long most = Long.MAX_VALUE / 4;
-    boolean isLong = options.time().compareTo(java.time.Duration.ofNanos(most)) > 0;
+    boolean isLong = options.time().compareTo(Duration.ofNanos(most)) > 0;
     deadlineNanos = System.nanoTime() + (isLong ? most : options.time().toNanos());
     left = options.evaluationsFor(coordinates);
   }
@@ -69,14 +71,18 @@ final class Runs {
     while (workspaces.size() < workers) {
       workspaces.add(objectives.get());
     }
-    onThreads(
-        workers,
+    IntConsumer work =
         worker -> {
           for (int k = next.getAndIncrement(); k < count; k = next.getAndIncrement()) {
             int share = total / count + (k < total % count ? 1 : 0);
             results.set(k, outcome(tasks.get(k), workspaces.get(worker), share, k));
           }
-        });
+        };
+    if (workers <= 1) {
+      work.accept(0);
+    } else {
+      onThreads(workers, work);
+    }
     return collected(results);
   }
 
@@ -111,11 +117,7 @@ final class Runs {
     ending = seen.compareTo(ending) > 0 ? seen : ending;
   }
 
-  private static void onThreads(int workers, java.util.function.IntConsumer work) {
-    if (workers <= 1) {
-      work.accept(0);
-      return;
-    }
+  private static void onThreads(int workers, IntConsumer work) {
     ExecutorService pool = Executors.newFixedThreadPool(workers - 1);
     try {
       List<Future<?>> others = new ArrayList<>();
@@ -128,10 +130,9 @@ final class Runs {
         other.get();
       }
     } catch (ExecutionException e) {
-      if (e.getCause() instanceof RuntimeException cause) {
-        throw cause;
-      }
-      throw new IllegalStateException("a search run failed", e.getCause());
+      throw e.getCause() instanceof RuntimeException cause
+          ? cause
+          : new IllegalStateException("a search run failed", e.getCause());
     } catch (InterruptedException e) {
       Thread.currentThread().interrupt();
       throw new IllegalStateException("the search was interrupted", e);

@@ -1,6 +1,8 @@
 package blochbound.search;
 
 import java.util.Arrays;
+import java.util.Comparator;
+import java.util.stream.IntStream;
 
 /**
  * Flips the coordinates of a point that lie on faces of the box to the opposite faces, one at a
@@ -50,10 +52,10 @@ final class VertexFlips {
 
   /** Coordinates on faces, those first whose flip promises most to first order. */
   private static int[] mostPromisingFirst(Iterate at) {
-    return java.util.stream.IntStream.range(0, at.x().length)
+    return IntStream.range(0, at.x().length)
         .filter(j -> Math.abs(at.x()[j]) == 1)
         .boxed()
-        .sorted(java.util.Comparator.comparingDouble(j -> -at.gradient()[j] * at.x()[j]))
+        .sorted(Comparator.comparingDouble(j -> -at.gradient()[j] * at.x()[j]))
         .mapToInt(Integer::intValue)
         .toArray();
   }

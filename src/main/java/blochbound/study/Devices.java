@@ -34,8 +34,8 @@ final class Devices {
    *
    * @param point decimals inside the ball
    * @param signed value times sign, inside the enclosure and not below the certified bound
-   * @param enclosure proved enclosure of the signed value; empty when the steady state is not proved
-   *     unique there
+   * @param enclosure proved enclosure of the signed value; empty when the steady state is not
+   *     proved unique there
    */
   record Verified(List<BigDecimal> point, double signed, Optional<Interval> enclosure) {}
 

@@ -280,9 +280,12 @@ class RequirementReaderTest {
     CaseText.pair()
         .set(
             "requirements",
-            "\n- §{measure: purity, atLeast: 1}\n- {name: §'', measure: purity, atLeast: 1}\n"
-                + "- {name: r, measure: purity, atLeast: 1}\n"
-                + "- {name: §r, measure: purity, atLeast: 1}")
+            """
+
+            - §{measure: purity, atLeast: 1}
+            - {name: §'', measure: purity, atLeast: 1}
+            - {name: r, measure: purity, atLeast: 1}
+            - {name: §r, measure: purity, atLeast: 1}""")
         .hasFaults(
             "`name` is missing in a requirement",
             "the name of the requirement is empty",

@@ -39,9 +39,7 @@ class DeviceSamplerTest {
 
   private static Ball correlated(String value) {
     return new Ball(
-        Norm.ELLIPSOID,
-        BigDecimal.ONE,
-        List.of(new Ball.Correlation(0, 1, new BigDecimal(value))));
+        Norm.ELLIPSOID, BigDecimal.ONE, List.of(new Ball.Correlation(0, 1, new BigDecimal(value))));
   }
 
   private static ParameterSpace uniform(Norm norm, int dimension) {
@@ -172,8 +170,7 @@ class DeviceSamplerTest {
   @Test
   void uniformAndTriangularHaveTheirMoments() {
     ParameterSpace space = Chips.symmetric(ball(Norm.BOX, "1"), UNIFORM, TRIANGULAR);
-    List<double[]> devices =
-        new DeviceSampler(space, SamplePoints.MONTE_CARLO, 7).next(50_000);
+    List<double[]> devices = new DeviceSampler(space, SamplePoints.MONTE_CARLO, 7).next(50_000);
     assertMean(0, devices, z -> z[0]);
     assertMean(0, devices, z -> z[1]);
     // [closed form] variances of the two distributions over [-1, 1]
@@ -187,8 +184,7 @@ class DeviceSamplerTest {
   @CsvSource({"0", "1", "4"})
   void offCentreTriangularPeaksAtTheNominalValue(String nominal) {
     ParameterSpace space = Chips.single("0", nominal, "4", TRIANGULAR);
-    List<double[]> devices =
-        new DeviceSampler(space, SamplePoints.MONTE_CARLO, 8).next(20_000);
+    List<double[]> devices = new DeviceSampler(space, SamplePoints.MONTE_CARLO, 8).next(20_000);
     double c = Double.parseDouble(nominal);
     // [closed form] mean (a + b + c) / 3 and variance (a^2 + b^2 + c^2 - ab - ac - bc) / 18
     double mean = (4 + c) / 3;
@@ -199,8 +195,7 @@ class DeviceSamplerTest {
   @Test
   void offCentreNormalIsCentredAtTheNominalValue() {
     ParameterSpace space = Chips.single("0", "1", "4", new Normal(0.1));
-    List<double[]> devices =
-        new DeviceSampler(space, SamplePoints.MONTE_CARLO, 8).next(20_000);
+    List<double[]> devices = new DeviceSampler(space, SamplePoints.MONTE_CARLO, 8).next(20_000);
     // [closed form] the ends are ten and thirty deviations away
     assertMean(1, devices, z -> 2 + 2 * z[0]);
     assertMean(0.01, devices, z -> Math.pow(1 + 2 * z[0], 2));
@@ -224,8 +219,7 @@ class DeviceSamplerTest {
   @EnumSource(Proposal.class)
   void jointlyNormalParametersKeepTheirCorrelation(Proposal proposal) {
     double sigma = 0.5;
-    ParameterSpace space =
-        Chips.symmetric(correlated("0.6"), new Normal(sigma), new Normal(sigma));
+    ParameterSpace space = Chips.symmetric(correlated("0.6"), new Normal(sigma), new Normal(sigma));
     DeviceSampler sampler = monteCarlo(space, proposal);
     List<double[]> devices = sampler.next(20_000);
     // [closed form] chi-squared with two degrees of freedom up to 1 / sigma^2

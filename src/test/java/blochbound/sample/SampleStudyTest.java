@@ -82,8 +82,7 @@ class SampleStudyTest {
     Chips chips = Chips.chain(2);
     SampleResult result = run(chips, Ball.unitBox(), OPTIONS.withCount(1_000));
     BlochGenerator generator = chips.generator();
-    StationaryMeasure single =
-        new StationaryMeasure(generator, excited(chips), Sense.AT_LEAST);
+    StationaryMeasure single = new StationaryMeasure(generator, excited(chips), Sense.AT_LEAST);
     for (int k = 0; k < 2; k++) {
       MeasureSample sample = result.measures().get(k);
       double sign = k == 0 ? 1 : -1;
@@ -137,9 +136,7 @@ class SampleStudyTest {
   void withoutTolerancesThereIsOneDevice() {
     Chips chips = new Chips(2);
     Scalar quanta = chips.between("0.3", "0.3");
-    chips
-        .jump(quanta.plus(Scalar.ONE), Chips.unit(2, 0, 1))
-        .jump(quanta, Chips.unit(2, 1, 0));
+    chips.jump(quanta.plus(Scalar.ONE), Chips.unit(2, 0, 1)).jump(quanta, Chips.unit(2, 1, 0));
     SampleResult result = run(chips, Ball.unitBox(), OPTIONS);
     assertEquals(1, result.count());
     assertEquals(1, result.acceptance());
@@ -208,7 +205,6 @@ class SampleStudyTest {
     SampleOptions options = SampleOptions.withDefaults();
     assertThrows(IllegalArgumentException.class, () -> options.withThreads(0));
     assertThrows(IllegalArgumentException.class, () -> options.withCount(-1));
-    assertThrows(
-        IllegalArgumentException.class, () -> options.withTime(Duration.ofSeconds(-1)));
+    assertThrows(IllegalArgumentException.class, () -> options.withTime(Duration.ofSeconds(-1)));
   }
 }

@@ -53,9 +53,9 @@ class StandardFunctionSearchTest {
         StandardFunction.onCube("Trid 6", 6, -36, 36, -50, StandardFunction::trid),
         StandardFunction.onCube("Trid 10", 10, -100, 100, -210, StandardFunction::trid),
         StandardFunction.onCube(
-            "Schwefel 2", 2, -500, 500, -2 * 418.982887272433706, StandardFunction::schwefel),
+            "Schwefel 2", 2, -500, 500, -2 * 418.9828872724337, StandardFunction::schwefel),
         StandardFunction.onCube(
-            "Schwefel 4", 4, -500, 500, -4 * 418.982887272433706, StandardFunction::schwefel),
+            "Schwefel 4", 4, -500, 500, -4 * 418.9828872724337, StandardFunction::schwefel),
         StandardFunction.onCube(
             "Styblinski-Tang 4",
             4,
