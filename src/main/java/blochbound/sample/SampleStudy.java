@@ -32,7 +32,7 @@ public final class SampleStudy {
 
   /** Number of devices for n unknowns when the options leave it open. */
   public static int defaultCount(int unknowns) {
-    return unknowns <= 63 ? 20_000 : unknowns <= 255 ? 2_000 : 200;
+    return unknowns <= 15 ? 10_000 : unknowns <= 63 ? 5_000 : unknowns <= 255 ? 1_000 : 200;
   }
 
   /**
