@@ -4,6 +4,7 @@ import blochbound.check.Check;
 import blochbound.generator.BlochGenerator;
 import blochbound.measure.LocatedMeasure;
 import blochbound.model.Requirement.Sense;
+import java.time.Duration;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -54,10 +55,12 @@ public final class SampleStudy {
       SampleOptions options,
       AtomicBoolean stop) {
     Check.that(measures.size() == senses.size(), "one sense for each measure");
+    long start = System.nanoTime();
     DeviceSampler sampler = new DeviceSampler(generator.space(), options.kind(), options.seed());
     LaneSolver solver = new LaneSolver(generator);
     int count = count(generator, options);
-    BatchQueue queue = new BatchQueue(sampler, solver.lanes(), count, options.time(), stop);
+    Duration left = options.time().minusNanos(System.nanoTime() - start);
+    BatchQueue queue = new BatchQueue(sampler, solver.lanes(), count, left, stop);
     List<BatchEvaluation.Values> batches =
         inParallel(
             options.threads(),
