@@ -197,8 +197,9 @@ public final class BranchAndBound {
 
   private synchronized void accept(Region region, Cell cell, double parentLower) {
     regions++;
-    // What holds on the parent holds on its halves.
-    double lower = Math.max(parentLower, cell.certifiedLower());
+    // What holds on the parent holds on its halves; a bound that is no number adds nothing.
+    double own = cell.certifiedLower();
+    double lower = own > parentLower ? own : parentLower;
     open.add(new Node(region, cell, lower, regions));
     if (cell.attained() < attained) {
       attained = cell.attained();

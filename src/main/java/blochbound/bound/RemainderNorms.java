@@ -29,11 +29,7 @@ final class RemainderNorms {
 
   /** Upper bound of the Frobenius norm, which is never below the spectral norm. */
   double frobeniusUp(double[] coordinates) {
-    double sum = 0;
-    for (double x : coordinates) {
-      sum += x * x;
-    }
-    return sum == 0 ? 0 : Rounding.inflate(Math.sqrt(sum), coordinates.length + 4L) + Rounding.TINY;
+    return Rounding.normUp(coordinates);
   }
 
   /** Upper bound of the spectral norm: |tr(S rho)| for all states. */

@@ -38,12 +38,21 @@ final class TrustRegion {
     }
     TrustRegion problem = new TrustRegion(q, g);
     double lambda = problem.multiplier();
-    double best = Double.NEGATIVE_INFINITY;
+    // |g'x + x'Qx| is at most |g| + |Q|_F on the ball, whatever the multipliers give.
+    double best = -Rounding.addUp(Rounding.normUp(g), frobeniusUp(q));
     double spread = Math.abs(problem.eigen.value(0)) + Math.abs(problem.eigen.value(problem.m - 1));
     for (double extra : new double[] {0, 1e-14, 1e-12, 1e-10, 1e-7, 1e-4}) {
       best = Math.max(best, problem.lagrangian(lambda + extra * (spread + lambda)));
     }
     return best;
+  }
+
+  private static double frobeniusUp(double[][] q) {
+    double[] rows = new double[q.length];
+    for (int i = 0; i < q.length; i++) {
+      rows[i] = Rounding.normUp(q[i]);
+    }
+    return Rounding.normUp(rows);
   }
 
   /** Multiplier at which the minimiser of the Lagrangian reaches the rim, by bisection. */

@@ -77,9 +77,9 @@ final class SuperoperatorMatrix {
     SparseMatrix.Builder builder = new SparseMatrix.Builder(size);
     double[] column = new double[size];
     double[] bound = new double[size];
-    // Each image entry is a sum of at most N products for either factor, each coordinate one of at
-    // most N image entries; a complex product takes a few roundings more.
-    double gamma = Rounding.gamma(3L * levels + 24);
+    // Each image entry is a sum of at most N products for every map, each coordinate one of at most
+    // N image entries; a complex product takes a few roundings more.
+    double gamma = Rounding.gamma((leftColumns.size() + 1L) * levels + 24);
     double dropped = 0;
     double errors = 0;
     for (int l = 0; l < size; l++) {

@@ -8,13 +8,13 @@ import java.util.SplittableRandom;
  * Random density matrices whose doubles are exactly a density matrix: dyadic mixtures of projectors
  * on vectors of Gaussian integers with squared length 64.
  */
-final class ExactStates {
+public final class ExactStates {
   private final SplittableRandom random;
   private final int first;
   private final int second;
 
   /** Draws states of two factors with the given level counts. */
-  ExactStates(long seed, int first, int second) {
+  public ExactStates(long seed, int first, int second) {
     this.random = new SplittableRandom(seed);
     this.first = first;
     this.second = second;
@@ -48,13 +48,18 @@ final class ExactStates {
   }
 
   /** Mixture of {@code count} random pure states. */
-  Hermitian mixed(int count) {
+  public Hermitian mixed(int count) {
     Hermitian state = pure(vector(size()));
     for (int k = 1; k < count; k++) {
       double weight = random.nextInt(1, 8) / 8.0;
       state = mix(state, weight, pure(vector(size())), 1 - weight);
     }
     return state;
+  }
+
+  /** A random ket of length one, whose doubles are exact. */
+  public ComplexMatrix ket() {
+    return vector(size()).scale(0.125);
   }
 
   private Hermitian basis(int k) {
