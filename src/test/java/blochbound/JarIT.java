@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.Path;
 import java.util.List;
 import java.util.jar.JarFile;
 import java.util.zip.ZipEntry;
@@ -21,6 +22,14 @@ class JarIT {
           "blochbound.cli.Blochbound",
           jar.getManifest().getMainAttributes().getValue("Main-Class"));
     }
+  }
+
+  @Test
+  void theProgramStartsAndTellsItsCommands() throws IOException, InterruptedException {
+    WholeProgram.Result help = WholeProgram.run(Path.of("."), "--help");
+    assertEquals(0, help.exitCode(), help.err());
+    assertTrue(help.out().contains("certify"), help.out());
+    assertEquals("", help.err());
   }
 
   @Test

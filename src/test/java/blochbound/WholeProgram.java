@@ -33,14 +33,41 @@ public final class WholeProgram {
     return Path.of(path);
   }
 
-  /** Runs {@code java -jar blochbound.jar arguments} in a directory and waits for its end. */
-  public static Result run(Path directory, String... arguments)
-      throws IOException, InterruptedException {
+  /** Directory of the project, in which a reader of its pages types commands. */
+  public static Path project() {
+    return jar().toAbsolutePath().getParent().getParent();
+  }
+
+  /** The command {@code java -jar blochbound.jar arguments}, with options of the machine. */
+  private static List<String> command(List<String> machine, String... arguments) {
     List<String> command = new ArrayList<>();
     command.add(Path.of(System.getProperty("java.home"), "bin", "java").toString());
+    command.addAll(machine);
     command.add("-jar");
     command.add(jar().toString());
     command.addAll(List.of(arguments));
+    return command;
+  }
+
+  /** The same command for work that is over before a better compiler would pay. */
+  public static List<String> briefCommand(String... arguments) {
+    return command(List.of("-XX:TieredStopAtLevel=1", "-XX:+UseSerialGC"), arguments);
+  }
+
+  /** Runs {@code java -jar blochbound.jar arguments} in a directory and waits for its end. */
+  public static Result run(Path directory, String... arguments)
+      throws IOException, InterruptedException {
+    return run(directory, command(List.of(), arguments));
+  }
+
+  /** Runs a {@link #briefCommand} in a directory and waits for its end. */
+  public static Result runBriefly(Path directory, String... arguments)
+      throws IOException, InterruptedException {
+    return run(directory, briefCommand(arguments));
+  }
+
+  private static Result run(Path directory, List<String> command)
+      throws IOException, InterruptedException {
     Path out = Files.createTempFile("blochbound", ".out");
     Path err = Files.createTempFile("blochbound", ".err");
     try {

@@ -72,9 +72,7 @@ final class AffineRegionBound {
 
   /** Error of the lifted coordinates: two transforms and one product, relative to their norm. */
   private double coordinateError(Hermitian operator, double scale) {
-    double norm =
-        Rounding.inflate(
-            operator.matrix().frobeniusNorm(), 2L * operator.size() * operator.size() + 4);
+    double norm = operator.matrix().frobeniusNormUp();
     return (kernel.basis().transformError() + 8 * Rounding.UNIT) * Math.max(scale, norm);
   }
 
@@ -226,7 +224,7 @@ final class AffineRegionBound {
     for (int k = 1; k < coordinates.length; k++) {
       sum += square(deviationUp(measure.liftedBasis(k), coordinates[k], region));
     }
-    double norm = Rounding.inflate(near.matrix().frobeniusNorm(), 2L * levels * levels + 4);
+    double norm = near.matrix().frobeniusNormUp();
     double error = kernel.basis().transformError() * norm;
     double distance = Rounding.sqrtUp(Rounding.inflate(sum, 2L * coordinates.length + 4));
     // No state is longer than 1.

@@ -120,6 +120,9 @@ record BallConstraint(Norm norm) {
     for (int a = 0; a <= region.coordinates(); a++) {
       before += Math.abs(polynomial[a]);
     }
+    for (int j = 0; norm == Norm.ELLIPSOID && j < region.coordinates(); j++) {
+      before += Math.abs(polynomial[table.plus(j + 1, j)]);
+    }
     return Rounding.gamma(8L * region.coordinates() + 16) * 2 * (lambda * size + before);
   }
 }

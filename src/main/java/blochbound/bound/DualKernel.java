@@ -252,7 +252,8 @@ final class DualKernel {
    * error of M_j            sum_j (|mu_j| + r_j) e_j sum_a |Y_a|
    * </pre>
    *
-   * <p>q counts every product and addition that may go into one entry of one S_a, and a few scalings.
+   * <p>q counts every product and addition that may go into one entry of one S_a, and a few
+   * scalings.
    */
   double errorUp(double[] witness) {
     double trial = Rounding.inflate(sumOfY, size + solved + 8L);

@@ -73,7 +73,7 @@ public final class SteadyCellBound implements CellBound {
   /** An order K that suits the size: higher orders pay when the factorisation is the main cost. */
   public static int suitableOrder(BlochGenerator generator) {
     int m = generator.space().coordinates();
-    double work = 4e5 * Math.max(1, generator.basis().size() / 256.0);
+    double work = 6e5 * Math.max(1, generator.basis().size() / 256.0);
     int order = 1;
     while (order < 4
         && MultiIndexTable.count(m, order + 1 + generator.degree())

@@ -90,7 +90,8 @@ public final class CaseReader {
     try (InputStream in = Files.newInputStream(file)) {
       return in.readNBytes(MOST_BYTES + 1);
     } catch (IOException e) {
-      String message = "the file cannot be read: " + ReferencedFiles.reason(e);
+      String reason = Files.isDirectory(file) ? "it is a directory" : ReferencedFiles.reason(e);
+      String message = "the file cannot be read: " + reason;
       throw new CaseFaultException(List.of(new Fault(file.toString(), 1, 1, message)));
     }
   }

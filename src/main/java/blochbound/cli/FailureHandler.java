@@ -22,14 +22,25 @@ final class FailureHandler implements IExecutionExceptionHandler, IParameterExce
   @Override
   public int handleParseException(ParameterException failure, String[] arguments) {
     CommandLine command = failure.getCommandLine();
-    err.println(PROGRAM + failure.getMessage());
     if (failure instanceof UnmatchedArgumentException unmatched) {
-      unmatched.getSuggestions().stream()
-          .findFirst()
-          .ifPresent(nearest -> err.println("Did you mean " + nearest + "?"));
+      reportUnmatched(unmatched);
+    } else {
+      err.println(PROGRAM + failure.getMessage());
     }
     err.println("See " + command.getCommandSpec().qualifiedName() + " --help.");
     return ExitCode.BAD_INPUT.number();
+  }
+
+  private void reportUnmatched(UnmatchedArgumentException failure) {
+    boolean isCommand = !failure.getCommandLine().getSubcommands().isEmpty();
+    String what =
+        failure.isUnknownOption()
+            ? "unknown option"
+            : isCommand ? "unknown command" : "surplus argument";
+    err.println(PROGRAM + what + " `" + failure.getUnmatched().get(0) + "`");
+    failure.getSuggestions().stream()
+        .findFirst()
+        .ifPresent(nearest -> err.println("Did you mean " + nearest + "?"));
   }
 
   @Override

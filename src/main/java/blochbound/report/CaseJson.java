@@ -114,7 +114,7 @@ public final class CaseJson {
   private void requirement(JsonFields json, int position) throws IOException {
     Requirement requirement = overview.designCase().requirements().get(position);
     json.demand(requirement);
-    json.text("moment", RequirementWords.moment(requirement.when()));
+    json.text("moment", RequirementWords.moment(requirement));
     json.real("nominal", overview.nominalValues().get(position).orElse(Double.NaN));
   }
 }

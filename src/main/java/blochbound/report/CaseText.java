@@ -118,7 +118,7 @@ public final class CaseText {
             new Column("from", Align.DECIMAL),
             new Column("to", Align.DECIMAL),
             new Column("unit", Align.LEFT),
-            new Column("share", Align.LEFT),
+            new Column("of nominal", Align.LEFT),
             new Column("distribution", Align.LEFT));
     for (Parameter p : device.parameters()) {
       ParameterText text = ParameterText.of(p, device.ball());
@@ -228,7 +228,7 @@ public final class CaseText {
           r.name(),
           r.measureText(),
           RequirementWords.limit(r),
-          RequirementWords.moment(r.when()),
+          RequirementWords.moment(r),
           nominal.isPresent() ? FormulaText.number(nominal.getAsDouble()) : "-");
     }
     return table.lines(INDENT);

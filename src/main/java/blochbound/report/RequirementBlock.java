@@ -9,11 +9,11 @@ import blochbound.study.FoundPoint;
 import blochbound.study.Guarantee;
 import blochbound.study.RequirementResult;
 import blochbound.study.SampledTruth;
-import blochbound.study.SampledTruth.Quantile;
 import java.math.BigDecimal;
 import java.math.RoundingMode;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.stream.Collectors;
 
 /** The part of a report that tells everything about one requirement. */
 final class RequirementBlock {
@@ -43,6 +43,7 @@ final class RequirementBlock {
     lines.addAll(labelled("worst found", result.worstFound().map(this::found).orElse("-")));
     lines.addAll(labelled("nominal", nominal()));
     lines.addAll(labelled("sampled", result.sampled().map(this::sampled).orElse("-")));
+    result.sampled().ifPresent(s -> lines.addAll(labelled("quantiles", quantiles(s))));
     lines.addAll(labelled("method", result.guaranteed().map(RequirementBlock::method).orElse("-")));
     result.remarks().forEach(remark -> lines.addAll(labelled("remark", remark)));
     result
@@ -84,13 +85,16 @@ final class RequirementBlock {
     StringBuilder text = new StringBuilder();
     text.append("worst ").append(digits.estimate(sampled.worst()));
     text.append(", mean ").append(digits.estimate(sampled.mean()));
-    for (Quantile quantile : sampled.quantiles()) {
-      text.append(", ").append(percent(quantile.probability())).append(" below ");
-      text.append(digits.estimate(quantile.value()));
-    }
-    text.append("; ").append(Counted.of(sampled.count(), "device"));
-    text.append(", ").append(percent(sampled.acceptance())).append(" of the draws in the ball");
+    text.append("; ").append(Counted.of(sampled.count(), "random device"));
+    text.append(" (").append(percent(sampled.acceptance())).append(" of the draws in the ball)");
     return text.toString();
+  }
+
+  /** The values that the stated shares of the devices do not exceed. */
+  private String quantiles(SampledTruth sampled) {
+    return sampled.quantiles().stream()
+        .map(q -> percent(q.probability()) + ": " + digits.estimate(q.value()))
+        .collect(Collectors.joining(", "));
   }
 
   private static String method(Guarantee guarantee) {

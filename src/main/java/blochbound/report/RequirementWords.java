@@ -1,5 +1,6 @@
 package blochbound.report;
 
+import blochbound.model.MeasureSpec;
 import blochbound.model.Requirement;
 import blochbound.model.Requirement.Sense;
 import blochbound.model.Unit;
@@ -16,18 +17,22 @@ final class RequirementWords {
     return sign + quantity(requirement.limit(), requirement.unit());
   }
 
-  /** The whole requirement, such as {@code gap at least 0.3 /us in every steady state}. */
+  /** The whole requirement, such as {@code purity at least 0.7 in every steady state}. */
   static String sentence(Requirement requirement) {
     String sense = requirement.sense() == Sense.AT_LEAST ? " at least " : " at most ";
     return requirement.measureText()
         + sense
         + quantity(requirement.limit(), requirement.unit())
         + " "
-        + moment(requirement.when());
+        + moment(requirement);
   }
 
   /** The moment at which it must hold. */
-  static String moment(When when) {
+  static String moment(Requirement requirement) {
+    When when = requirement.when();
+    if (isOfDynamics(requirement.measure())) {
+      return "in every device";
+    }
     if (when instanceof When.At at) {
       return "at " + quantity(at.time(), at.unit());
     }
@@ -38,6 +43,11 @@ final class RequirementWords {
           + quantity(during.until(), during.untilUnit());
     }
     return when instanceof When.AtEnd ? "at the end of the sequence" : "in every steady state";
+  }
+
+  /** Tells whether a measure belongs to the dynamics rather than to a state at a moment. */
+  private static boolean isOfDynamics(MeasureSpec measure) {
+    return measure instanceof MeasureSpec.Gap || measure instanceof MeasureSpec.Settling;
   }
 
   /** A decimal with its unit. */

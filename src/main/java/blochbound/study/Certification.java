@@ -6,6 +6,7 @@ import blochbound.measure.LocatedMeasure;
 import blochbound.measure.Measures;
 import blochbound.model.DesignCase;
 import blochbound.model.MeasureSpec;
+import blochbound.model.Parameter;
 import blochbound.model.ParameterSpace;
 import blochbound.model.Requirement;
 import blochbound.model.When;
@@ -13,6 +14,7 @@ import blochbound.sample.MeasureSample;
 import blochbound.sample.SampleOptions;
 import blochbound.sample.SampleResult;
 import blochbound.sample.SampleStudy;
+import java.math.BigDecimal;
 import java.time.Duration;
 import java.util.ArrayList;
 import java.util.List;
@@ -127,12 +129,9 @@ public final class Certification {
             generator, UNIQUENESS_REGIONS, budget.compareTo(most) < 0 ? budget : most);
     ParameterSpace space = generator.space();
     if (outcome instanceof UniquenessProof.Outcome.Singular singular) {
+      List<BigDecimal> point = space.decimalPointInside(singular.point());
       return new SteadyStateStatus(
-          SteadyStateStatus.Kind.NOT_UNIQUE,
-          Optional.of(space.decimalPointInside(singular.point())),
-          "There are several stationary states at this device (to rounding); every guarantee holds"
-              + " for all of them. Where that is not meant, move the range off the rate at zero, or"
-              + " state 'start:' and 'at:'.");
+          SteadyStateStatus.Kind.NOT_UNIQUE, Optional.of(point), severalStates(point));
     }
     if (outcome instanceof UniquenessProof.Outcome.Unproved unproved) {
       return new SteadyStateStatus(
@@ -142,6 +141,24 @@ public final class Certification {
               + " holds for all stationary states.");
     }
     return new SteadyStateStatus(SteadyStateStatus.Kind.UNIQUE, Optional.empty(), "");
+  }
+
+  private String severalStates(List<BigDecimal> point) {
+    List<Parameter> parameters = designCase.device().parameters();
+    List<String> atZero = new ArrayList<>();
+    for (int i = 0; i < point.size(); i++) {
+      if (point.get(i).signum() == 0 && parameters.get(i).nominal().signum() != 0) {
+        atZero.add(parameters.get(i).name());
+      }
+    }
+    return "There are several stationary states at this device (to rounding); every guarantee holds"
+        + " for all of them. "
+        + (atZero.isEmpty()
+            ? "Where that is not meant, add the loss that makes the steady state unique,"
+            : "Where that is not meant, move the range of "
+                + String.join(" and ", atZero)
+                + " off zero,")
+        + " or state 'start:' and 'at:'.";
   }
 
   private static Verdict overall(List<RequirementResult> results) {

@@ -164,8 +164,7 @@ final class SteadyRequirementStudy {
   }
 
   private Guarantee guarantee(BranchOutcome outcome) {
-    String method =
-        outcome.regions() == 1 ? "dual observable, one region" : "dual-observable branch and bound";
+    String method = outcome.regions() == 1 ? "dual observable" : "dual-observable branch and bound";
     // The bound is rounded to the safe side on its way into the requirement's unit.
     Interval inUnit = Interval.of(sign * outcome.certifiedLower()).dividedBy(unit);
     double value = sign > 0 ? inUnit.lower() : inUnit.upper();

@@ -253,10 +253,15 @@ class BlochboundTest {
   void unknownOptionAndCommandGetASuggestion() {
     InProcess option = InProcess.run("certify", "certified", "--sed", "1");
     assertEquals(2, option.code());
+    assertTrue(option.err().startsWith("blochbound: unknown option `--sed`"), option.err());
     assertTrue(option.err().contains("Did you mean --seed?"), option.err());
     InProcess command = InProcess.run("certfy", "certified");
     assertEquals(2, command.code());
+    assertTrue(command.err().startsWith("blochbound: unknown command `certfy`"), command.err());
     assertTrue(command.err().contains("Did you mean certify?"), command.err());
+    InProcess argument = InProcess.run("show", "certified", "refuted");
+    assertEquals(2, argument.code());
+    assertTrue(argument.err().startsWith("blochbound: surplus argument `refuted`"), argument.err());
   }
 
   @Test

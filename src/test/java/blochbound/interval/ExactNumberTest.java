@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import blochbound.BigReference;
 import blochbound.Draws;
 import java.math.BigDecimal;
+import java.math.BigInteger;
 import java.util.Optional;
 import java.util.SplittableRandom;
 import org.apache.commons.math3.fraction.BigFraction;
@@ -68,6 +69,16 @@ class ExactNumberTest {
     assertEquals(Optional.empty(), ExactNumber.PI.plus(ExactNumber.ONE));
     assertEquals(Optional.of(ExactNumber.PI), ExactNumber.ZERO.plus(ExactNumber.PI));
     assertEquals(Optional.of(ExactNumber.PI), ExactNumber.PI.plus(ExactNumber.ZERO));
+  }
+
+  @Test
+  void fractionsAreReducedAndKnowTheirParts() {
+    ExactNumber number = ExactNumber.of(BigInteger.valueOf(6), BigInteger.valueOf(-4));
+    // [closed form] 6/(-4) = -3/2
+    assertEquals(BigInteger.valueOf(-3), number.numerator());
+    assertEquals(BigInteger.TWO, number.denominator());
+    assertEquals(-1.5, number.doubleValue());
+    assertThrows(ArithmeticException.class, () -> ExactNumber.of(BigInteger.ONE, BigInteger.ZERO));
   }
 
   @Test

@@ -221,6 +221,21 @@ class IntervalTest {
   }
 
   @Test
+  void cosineStaysNarrowFarFromZero() {
+    // [closed form] the slope of cos is at most 1
+    Interval wave = Interval.of(100, 100.1).cos();
+    assertTrue(wave.upper() - wave.lower() <= 0.1 + 1e-15);
+    assertTrue(wave.contains(Math.cos(100.05)));
+  }
+
+  @Test
+  void zeroHasNoSign() {
+    // [invariant] equal sets are equal intervals
+    assertEquals(Interval.ZERO, new Interval(-0.0, -0.0));
+    assertEquals(Interval.of(0, 1), Interval.of(-1, -0.0).negate());
+  }
+
+  @Test
   void endsOutOfOrderOrNotNumbersAreRefused() {
     assertThrows(IllegalArgumentException.class, () -> Interval.of(2, 1));
     assertThrows(IllegalArgumentException.class, () -> new Interval(Double.NaN, 1));

@@ -52,6 +52,14 @@ class RoundingTest {
   }
 
   @Test
+  void zeroStaysExact() {
+    // [closed form] 0 x = 0, 0 / x = 0, sqrt(0) = 0
+    assertEquals(0, Rounding.timesUp(0, 3) + Rounding.timesDown(3, 0));
+    assertEquals(0, Rounding.divideUp(0, 3));
+    assertEquals(0, Rounding.sqrtUp(0));
+  }
+
+  @Test
   void gammaEndsWhereItsFormulaDoes() {
     assertEquals(Double.POSITIVE_INFINITY, Rounding.gamma(1L << 52));
     assertTrue(Double.isFinite(Rounding.gamma((1L << 52) - 1)));

@@ -88,7 +88,7 @@ class CaseTextTest {
               -----------  -------------------  ----------  -------------------------------  --------
               bright       population(left, e)  >= 0.90     in every steady state            0.980392
               thirds       population(left, e)  <= 3 third  in every steady state            2.94118
-              quick        gap                  >= 0.3 /us  in every steady state            -
+              quick        gap                  >= 0.3 /us  in every device                  -
               later        purity               >= 0.3      at all times from 1 us to 10 us  -
             """),
         text);
@@ -109,11 +109,11 @@ class CaseTextTest {
     String expected =
         """
         3 parameters, ball of norm inf and radius 0.5
-          parameter  nominal   from     to  unit  share     distribution
-          ---------  -------  -----  -----  ----  --------  ------------
-          pump          1.0   0.9    1.1    /us   +-10 %    uniform
-          decay         0.02  0.015  0.025  /us   +-25 %    uniform
-          shift         0     0      0      /us   constant  -
+          parameter  nominal   from     to  unit  of nominal  distribution
+          ---------  -------  -----  -----  ----  ----------  ------------
+          pump          1.0   0.9    1.1    /us   +-10 %      uniform
+          decay         0.02  0.015  0.025  /us   +-25 %      uniform
+          shift         0     0      0      /us   constant    -
         """;
     assertTrue(text.contains(expected), text);
   }
@@ -141,8 +141,7 @@ class CaseTextTest {
     assertTrue(
         json.contains("\"rate\": \"pump\",\n      \"operator\": [\n        \"|e><g|\""), json);
     assertTrue(json.contains("\"target\": null"), json);
-    assertTrue(
-        json.contains("\"moment\": \"in every steady state\",\n      \"nominal\": null"), json);
+    assertTrue(json.contains("\"moment\": \"in every device\",\n      \"nominal\": null"), json);
   }
 
   @Test

@@ -38,8 +38,8 @@ class CertifyTextTest {
         guaranteed   0.91420 (margin +0.0142)
         worst found  0.91514 (margin +0.0151; verified)
         nominal      0.95275
-        sampled      worst 0.91514, mean 0.95275, 1 % below 0.91514, 50 % below 0.95275; 20000 devices,
-                     100 % of the draws in the ball
+        sampled      worst 0.91514, mean 0.95275; 20000 random devices (100 % of the draws in the ball)
+        quantiles    1 %: 0.91514, 50 %: 0.95275
         method       dual-observable branch and bound, 15 regions, 0.0234 s
 
         worst device found  value  unit  nominal  share of tolerance
