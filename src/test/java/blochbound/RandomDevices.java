@@ -48,8 +48,7 @@ public final class RandomDevices {
         IntStream.range(0, shape.length)
             .mapToObj(
                 s ->
-                    new Site(
-                        "s" + s, IntStream.range(0, shape[s]).mapToObj(k -> "l" + k).toList()))
+                    new Site("s" + s, IntStream.range(0, shape[s]).mapToObj(k -> "l" + k).toList()))
             .toList());
   }
 
@@ -103,7 +102,8 @@ public final class RandomDevices {
           amplitude = amplitude.plus(exact(matrix(random, n)).times(p));
         }
         case 2 -> {
-          parameters.add(parameter(k, 0.02, 1, isCentred));
+          // Some ranges begin at the rate zero.
+          parameters.add(parameter(k, random.nextInt(3) == 0 ? 0 : 0.02, 1, isCentred));
           jumps.add(new Jump(p, exact(matrix(random, n))));
         }
         case 3 -> {
@@ -113,7 +113,7 @@ public final class RandomDevices {
         case 4 -> {
           // A weak jump makes a slow device; a power of two keeps its entries exact.
           parameters.add(parameter(k, 0.1, 1, isCentred));
-          ComplexMatrix weak = matrix(random, n).scale(Math.scalb(1.0, -random.nextInt(12)));
+          ComplexMatrix weak = matrix(random, n).scale(Math.scalb(1.0, -random.nextInt(24)));
           jumps.add(new Jump(p.reciprocal(), exact(weak)));
         }
         default -> {
@@ -142,7 +142,7 @@ public final class RandomDevices {
 
   /** A parameter whose whole range lies between two numbers. */
   private Parameter parameter(int k, double least, double most, boolean isCentred) {
-    double a = random.nextDouble(least, most);
+    double a = least == 0 ? 0 : random.nextDouble(least, most);
     double width = random.nextDouble(0.02, 0.5) * (most - a);
     BigDecimal low = decimal(a);
     BigDecimal high = low.add(decimal(width)).add(new BigDecimal("0.002"));
@@ -163,14 +163,17 @@ public final class RandomDevices {
     return OperatorForm.constant(ComplexBall.exact(matrix));
   }
 
-  /** A ball of any norm; correlated ellipsoids occur when there are two parameters or more. */
+  /**
+   * A ball of any norm, at times with a smaller radius; correlated ellipsoids occur when there are
+   * two parameters or more.
+   */
   public static Ball ball(SplittableRandom random, int parameters) {
+    BigDecimal radius = random.nextInt(4) == 0 ? new BigDecimal("0.37") : BigDecimal.ONE;
     int kind = random.nextInt(4);
     if (kind == 3 && parameters > 1) {
       BigDecimal value = BigDecimal.valueOf(random.nextInt(-9, 10), 1);
-      return new Ball(
-          Ball.Norm.ELLIPSOID, BigDecimal.ONE, List.of(new Ball.Correlation(0, 1, value)));
+      return new Ball(Ball.Norm.ELLIPSOID, radius, List.of(new Ball.Correlation(0, 1, value)));
     }
-    return new Ball(Ball.Norm.values()[kind % 3], BigDecimal.ONE, List.of());
+    return new Ball(Ball.Norm.values()[kind % 3], radius, List.of());
   }
 }

@@ -8,16 +8,11 @@ import blochbound.generator.MultiIndexTable;
 import java.math.BigDecimal;
 import java.util.Arrays;
 import java.util.SplittableRandom;
-import java.util.stream.LongStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 class PolynomialRangeTest {
-  static LongStream seeds() {
-    return LongStream.range(0, Integer.getInteger("blochbound.soak", 150));
-  }
-
   private static BigDecimal value(double[] c, MultiIndexTable table, double[] x) {
     BigDecimal sum = BigDecimal.ZERO;
     for (int a = 0; a < c.length; a++) {
@@ -39,7 +34,7 @@ class PolynomialRangeTest {
   }
 
   @ParameterizedTest(name = "seed {0}")
-  @MethodSource("seeds")
+  @MethodSource("blochbound.Draws#seeds")
   void theBoundIsNeverAboveAValueInExactDecimals(long seed) {
     SplittableRandom random = new SplittableRandom(seed);
     int m = random.nextInt(1, 7);
@@ -58,14 +53,13 @@ class PolynomialRangeTest {
     assertTrue(value(c, table, guess).compareTo(bound) >= 0);
     for (int k = 0; k < 40; k++) {
       boolean isVertex = k % 2 == 0;
-      double[] x =
-          random.doubles(m, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
+      double[] x = random.doubles(m, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
       assertTrue(value(c, table, x).compareTo(bound) >= 0, () -> Arrays.toString(x));
     }
   }
 
   @ParameterizedTest(name = "seed {0}")
-  @MethodSource("seeds")
+  @MethodSource("blochbound.Draws#seeds")
   void multilinearFormsAreBoundedBelowTheirBestVertex(long seed) {
     SplittableRandom random = new SplittableRandom(seed);
     int m = random.nextInt(2, 5);

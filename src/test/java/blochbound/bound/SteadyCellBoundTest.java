@@ -163,11 +163,7 @@ class SteadyCellBoundTest {
         TestCases.plain(
             "sites: {q: {levels: [g, e]}}",
             String.format(
-                Locale.ROOT,
-                "parameters: {t: {nominal: %s, range: [%s, %s]}}",
-                nominal,
-                low,
-                high),
+                Locale.ROOT, "parameters: {t: {nominal: %s, range: [%s, %s]}}", nominal, low, high),
             "jumps: [{rate: 1+t, operator: lower@q}, {rate: 0.1*(1+t), operator: raise@q}]",
             requirement("population(q, g)", "atLeast: 0.9"));
     Bracket bracket = Brackets.of(touching, BranchOptions.toGap(1e-3).withRegions(100));
@@ -254,7 +250,8 @@ class SteadyCellBoundTest {
     // [closed form] 50/(50 + 1.2 + y), y from -reach to reach: |w|_2 = sqrt(0.14) on the ellipsoid,
     // |w|_inf = 0.3 on the diamond
     assertTrue(high >= 50 / (51.2 - reach));
-    // [closed form] first order, and the second-order remainder |w|^2/s^2 of the multinomial theorem
+    // [closed form] first order, and the second-order remainder |w|^2/s^2 of the multinomial
+    // theorem
     double first = 50 / 51.2 * (1 + reach / 51.2);
     assertEquals(first + reach * reach / (51.2 * 51.2), high, 1e-10);
   }
@@ -272,10 +269,7 @@ class SteadyCellBoundTest {
               for (int k = 0; k < 30; k++) {
                 boolean isVertex = k < 6;
                 double[] x =
-                    random
-                        .doubles(2, -1, 1)
-                        .map(v -> isVertex ? Math.copySign(1, v) : v)
-                        .toArray();
+                    random.doubles(2, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
                 double value = Brackets.value(designCase, c.region().at(x));
                 // Samples of the concurrence are rounded by up to about 1e-9 here.
                 assertTrue(c.certifiedLower() <= value + 1e-9);

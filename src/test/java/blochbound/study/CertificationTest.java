@@ -64,7 +64,9 @@ class CertificationTest {
     assertEquals(SteadyStateStatus.Kind.UNIQUE, result.status().orElseThrow().kind());
     List<BigDecimal> point = entangled.worstFound().orElseThrow().point();
     // [independent] worst at both pumps -20 %, both decays 0.03, the shift at either end
-    assertEquals(List.of("0.8", "0.8", "0.03", "0.03"), point.stream().limit(4).map(BigDecimal::toPlainString).toList());
+    assertEquals(
+        List.of("0.8", "0.8", "0.03", "0.03"),
+        point.stream().limit(4).map(BigDecimal::toPlainString).toList());
     assertEquals(8, Math.abs(point.get(4).doubleValue()), 0);
     assertTrue(entangled.worstFound().get().verified());
   }
@@ -101,6 +103,18 @@ class CertificationTest {
       // [independent] brute force as above: no worst value is below 0.9151
       assertTrue(guaranteed(r) <= (r.requirement().name().equals("entangled") ? 0.91514 : 0.95444));
     }
+  }
+
+  @Test
+  void severalThreadsProveTheSame() {
+    RequirementResult result =
+        run(pumpedPair("0.914", "0.94"), options().withThreads(3).withGap(1e-4))
+            .requirements()
+            .get(0);
+    // [independent] brute force as above
+    assertEquals(0.915139, found(result), 5e-7);
+    assertTrue(found(result) - guaranteed(result) <= 1e-4);
+    assertEquals(Verdict.CERTIFIED, result.verdict());
   }
 
   @Test
@@ -239,6 +253,22 @@ class CertificationTest {
     assertEquals(Verdict.UNDECIDED, result.verdict());
     assertTrue(result.guaranteed().isEmpty());
     assertEquals(1, result.remarks().size());
+  }
+
+  @ParameterizedTest
+  @ValueSource(strings = {"purity", "population(q, 0)", "mean(number@q + 1)"})
+  void aSiteWithOneLevelHasOneState(String measure) {
+    RequirementResult result =
+        only(
+            options(),
+            "sites: {q: {levels: 1}}",
+            "parameters: {a: {nominal: 0.4, tolerance: 0.1}}",
+            "hamiltonian: a*number@q",
+            "requirements: [{name: only, measure: \"" + measure + "\", atLeast: 0.9}]");
+    // [closed form] the only state is 1
+    assertEquals(1, result.nominal().orElseThrow(), 0);
+    assertEquals(1, guaranteed(result), 1e-12);
+    assertEquals(Verdict.CERTIFIED, result.verdict());
   }
 
   @Test

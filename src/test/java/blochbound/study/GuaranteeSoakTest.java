@@ -3,6 +3,7 @@ package blochbound.study;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import blochbound.Draws;
 import blochbound.RandomDevices;
 import blochbound.bound.BranchAndBound;
 import blochbound.bound.BranchOptions;
@@ -51,10 +52,6 @@ class GuaranteeSoakTest {
   private static final BigDecimal REFERENCE_ERROR = new BigDecimal("1e-20");
 
   private static final int SAMPLES = 200;
-
-  static LongStream seeds() {
-    return LongStream.range(0, Integer.getInteger("blochbound.soak", 200));
-  }
 
   private record Trial(
       int[] shape, Device device, BlochGenerator generator, MeasureSpec spec, Sense sense) {
@@ -109,7 +106,7 @@ class GuaranteeSoakTest {
   }
 
   @ParameterizedTest(name = "seed {0}")
-  @MethodSource("seeds")
+  @MethodSource("blochbound.Draws#seeds")
   void noDeviceOfTheBallLiesBeyondTheCertifiedBound(long seed) {
     SplittableRandom random = new SplittableRandom(seed);
     Trial trial = draw(random);
@@ -155,7 +152,7 @@ class GuaranteeSoakTest {
   }
 
   static LongStream sectorSeeds() {
-    return LongStream.range(0, Integer.getInteger("blochbound.soak", 200) / 8);
+    return Draws.seeds().filter(s -> s % 8 == 0);
   }
 
   /** A matrix with a given part on some levels and another on the rest. */
