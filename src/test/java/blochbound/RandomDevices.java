@@ -47,8 +47,7 @@ public final class RandomDevices {
         IntStream.range(0, shape.length)
             .mapToObj(
                 s ->
-                    new Site(
-                        "s" + s, IntStream.range(0, shape[s]).mapToObj(k -> "l" + k).toList()))
+                    new Site("s" + s, IntStream.range(0, shape[s]).mapToObj(k -> "l" + k).toList()))
             .toList());
   }
 

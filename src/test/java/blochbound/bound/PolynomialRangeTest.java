@@ -58,8 +58,7 @@ class PolynomialRangeTest {
     assertTrue(value(c, table, guess).compareTo(bound) >= 0);
     for (int k = 0; k < 40; k++) {
       boolean isVertex = k % 2 == 0;
-      double[] x =
-          random.doubles(m, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
+      double[] x = random.doubles(m, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
       assertTrue(value(c, table, x).compareTo(bound) >= 0, () -> Arrays.toString(x));
     }
   }

@@ -158,11 +158,7 @@ class SteadyCellBoundTest {
         TestCases.plain(
             "sites: {q: {levels: [g, e]}}",
             String.format(
-                Locale.ROOT,
-                "parameters: {t: {nominal: %s, range: [%s, %s]}}",
-                nominal,
-                low,
-                high),
+                Locale.ROOT, "parameters: {t: {nominal: %s, range: [%s, %s]}}", nominal, low, high),
             "jumps: [{rate: 1+t, operator: lower@q}, {rate: 0.1*(1+t), operator: raise@q}]",
             requirement("population(q, g)", "atLeast: 0.9"));
     Bracket bracket = Brackets.of(touching, BranchOptions.toGap(1e-3).withRegions(100));
@@ -241,10 +237,7 @@ class SteadyCellBoundTest {
               for (int k = 0; k < 30; k++) {
                 boolean isVertex = k < 6;
                 double[] x =
-                    random
-                        .doubles(2, -1, 1)
-                        .map(v -> isVertex ? Math.copySign(1, v) : v)
-                        .toArray();
+                    random.doubles(2, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
                 double value = Brackets.value(designCase, c.region().at(x));
                 // Samples of the concurrence are rounded by up to about 1e-9 here.
                 assertTrue(c.certifiedLower() <= value + 1e-9);

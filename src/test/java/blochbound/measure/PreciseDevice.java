@@ -131,8 +131,7 @@ public final class PreciseDevice {
       for (int column = 0; column < n * n; column++) {
         BigDecimal x = new BigDecimal(rho.re(column / n, column % n));
         BigDecimal y = new BigDecimal(rho.im(column / n, column % n));
-        sumRe =
-            sumRe.add(re[row][column].multiply(x)).subtract(im[row][column].multiply(y));
+        sumRe = sumRe.add(re[row][column].multiply(x)).subtract(im[row][column].multiply(y));
         sumIm = sumIm.add(re[row][column].multiply(y)).add(im[row][column].multiply(x));
       }
       out[0][row] = sumRe;
@@ -222,8 +221,7 @@ public final class PreciseDevice {
     for (int j = k; j < a.length; j++) {
       a[j] =
           a[j].subtract(x.multiply(fromA[j]).subtract(y.multiply(fromB[j])), PreciseMatrix.DIGITS);
-      b[j] =
-          b[j].subtract(x.multiply(fromB[j]).add(y.multiply(fromA[j])), PreciseMatrix.DIGITS);
+      b[j] = b[j].subtract(x.multiply(fromB[j]).add(y.multiply(fromA[j])), PreciseMatrix.DIGITS);
     }
   }
 
