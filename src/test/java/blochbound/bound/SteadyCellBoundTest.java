@@ -6,7 +6,12 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import blochbound.TestCases;
 import blochbound.bound.Brackets.Bracket;
 import blochbound.bound.BranchOutcome.Reason;
+import blochbound.generator.BlochGenerator;
+import blochbound.measure.LocatedMeasure;
+import blochbound.measure.Measures;
 import blochbound.model.DesignCase;
+import blochbound.model.Region;
+import blochbound.model.Requirement.Sense;
 import java.util.Arrays;
 import java.util.Locale;
 import java.util.SplittableRandom;
@@ -222,6 +227,32 @@ class SteadyCellBoundTest {
     // [invariant] steady states have no unit of time
     assertEquals(plain.high(), scaled.high(), 1e-11);
     assertEquals(plain.low(), scaled.low(), 1e-11);
+  }
+
+  @ParameterizedTest
+  @CsvSource({"2, 0.374165738677394", "1, 0.3"})
+  void wholeBallsAreBoundedSharply(int norm, double reach) {
+    DesignCase designCase =
+        TestCases.plain(
+            "sites: {q: {levels: [g, e]}}",
+            "parameters:",
+            "  a: {nominal: 0.4, tolerance: 0.3}",
+            "  b: {nominal: 0.4, tolerance: 0.2}",
+            "  c: {nominal: 0.4, tolerance: 0.1}",
+            "ball: {norm: " + norm + ", radius: 1}",
+            "jumps: [{rate: 50, operator: raise@q}, {rate: a+b+c, operator: lower@q}]",
+            requirement("population(q, e)", "atMost: 1"));
+    BlochGenerator generator = BlochGenerator.stationary(designCase.device());
+    LocatedMeasure located =
+        Measures.of(designCase.requirements().get(0).measure(), designCase.device().space());
+    SteadyCellBound bound = new SteadyCellBound(generator, located, Sense.AT_MOST, 1);
+    double high = -bound.bound(Region.whole(3), Double.POSITIVE_INFINITY).certifiedLower();
+    // [closed form] 50/(50 + 1.2 + y), y from -reach to reach: |w|_2 = sqrt(0.14) on the ellipsoid,
+    // |w|_inf = 0.3 on the diamond
+    assertTrue(high >= 50 / (51.2 - reach));
+    // [closed form] first order, and the second-order remainder |w|^2/s^2 of the multinomial theorem
+    double first = 50 / 51.2 * (1 + reach / 51.2);
+    assertEquals(first + reach * reach / (51.2 * 51.2), high, 1e-10);
   }
 
   @Test

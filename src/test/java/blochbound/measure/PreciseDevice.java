@@ -252,7 +252,7 @@ public final class PreciseDevice {
     /**
      * A measure by its definition; errs by less than 1e-20.
      *
-     * @param spec the measure; a negativity must be that of the first of two sites
+     * @param spec the measure; a negativity must be that of the first site
      * @param dimensions level counts of the sites
      */
     public BigDecimal value(MeasureSpec spec, int... dimensions) {
@@ -275,7 +275,7 @@ public final class PreciseDevice {
         return PreciseMeasures.traceDistance(rho, reference);
       }
       if (spec instanceof MeasureSpec.Negativity) {
-        return PreciseMeasures.negativity(rho, dimensions[1]);
+        return PreciseMeasures.negativity(rho, rho.rows / dimensions[0]);
       }
       if (spec instanceof MeasureSpec.Concurrence) {
         return PreciseMeasures.concurrence(rho);
