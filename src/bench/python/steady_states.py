@@ -2,7 +2,8 @@
 
 A = A0 + sum t_i A_i and b = b0 + sum t_i b_i are assembled for a stack of devices by tensordot and
 solved by numpy.linalg.solve; one thread. LAPACK does not look at zeros, so full random matrices of
-the same size and number of terms stand for every device. Times are microseconds for one device.
+the same size and number of terms stand for every device. Times are microseconds for one device;
+stacks are small enough to often run undisturbed, so compare the best ones on a busy machine.
 
 Run: OPENBLAS_NUM_THREADS=1 python3 src/bench/python/steady_states.py
 """
@@ -14,12 +15,12 @@ import numpy as np
 
 # device name, unknowns n, terms k, devices in a stack, repetitions
 SIZES = [
-    ("chain1", 3, 4, 4096, 60),
-    ("chain2", 15, 9, 4096, 30),
-    ("chain3", 63, 14, 512, 20),
-    ("chain4", 255, 19, 32, 12),
-    ("full4", 15, 8, 4096, 30),
-    ("full8", 63, 8, 512, 20),
+    ("chain1", 3, 4, 4096, 400),
+    ("chain2", 15, 9, 1024, 200),
+    ("chain3", 63, 14, 64, 200),
+    ("chain4", 255, 19, 8, 60),
+    ("full4", 15, 8, 1024, 200),
+    ("full8", 63, 8, 64, 200),
 ]
 
 

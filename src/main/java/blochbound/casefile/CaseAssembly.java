@@ -60,7 +60,7 @@ final class CaseAssembly {
     refuseUnsupported();
     // With a faulty unit of time the rest is read as in microseconds, to find further faults.
     this.timeUnit = log.attempt(this::timeUnit).orElse("us");
-    this.scope = new Scope(new UnitTable(timeUnit), log);
+    this.scope = new Scope(new UnitTable(timeUnit), log, new WorkLimit());
   }
 
   private void checkFormat() {

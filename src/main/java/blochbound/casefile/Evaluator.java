@@ -40,7 +40,10 @@ final class Evaluator {
       throw passage.fault("an expression is missing");
     }
     Expression expression = ExpressionParser.parse(passage, scope.units());
-    return expression.evaluate(new Evaluator(scope, passage));
+    Evaluator evaluator = new Evaluator(scope, passage);
+    Value value = expression.evaluate(evaluator);
+    evaluator.charge(scope.limit().chargeKept(value), passage.from());
+    return value;
   }
 
   Value number(Expression.Literal node) {

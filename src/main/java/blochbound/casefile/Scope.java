@@ -25,12 +25,13 @@ final class Scope {
   private final List<Optional<Parameter>> parameters = new ArrayList<>();
   private final Map<String, Optional<Value>> operators = new LinkedHashMap<>();
   private final Conditions conditions = new Conditions();
-  private final WorkLimit limit = new WorkLimit();
+  private final WorkLimit limit;
   private Optional<LocalOperators> sites = Optional.empty();
 
-  Scope(UnitTable units, FaultLog log) {
+  Scope(UnitTable units, FaultLog log, WorkLimit limit) {
     this.units = units;
     this.log = log;
+    this.limit = limit;
   }
 
   UnitTable units() {

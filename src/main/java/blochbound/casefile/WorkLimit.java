@@ -22,6 +22,7 @@ final class WorkLimit {
   private static final long STEPS_OF_A_PAIR = 100;
   private static final long MOST_MATRIX_STEPS = 1_000_000_000L;
   private static final long MOST_ENTRIES = 4_000_000L;
+  private static final long MOST_KEPT_ENTRIES = 16_000_000L;
   private static final int LONGEST_KEY = 20_000;
   private static final int MOST_BITS = 4096;
   private static final int LARGEST_EXPONENT = 1000;
@@ -31,8 +32,30 @@ final class WorkLimit {
   private static final double LARGEST_NUMBER = 1e300;
   private static final double LARGEST_NORM = 1e100;
 
+  private final long mostScalarSteps;
+  private final long mostMatrixSteps;
+  private final long mostKeptEntries;
   private long scalarSteps;
   private long matrixSteps;
+  private long keptEntries;
+
+  /** The limits of a case. */
+  WorkLimit() {
+    this(MOST_SCALAR_STEPS, MOST_MATRIX_STEPS, MOST_KEPT_ENTRIES);
+  }
+
+  /**
+   * Other limits.
+   *
+   * @param mostScalarSteps operations on monomials
+   * @param mostMatrixSteps multiplications of matrix entries
+   * @param mostKeptEntries matrix entries of all finished expressions together
+   */
+  WorkLimit(long mostScalarSteps, long mostMatrixSteps, long mostKeptEntries) {
+    this.mostScalarSteps = mostScalarSteps;
+    this.mostMatrixSteps = mostMatrixSteps;
+    this.mostKeptEntries = mostKeptEntries;
+  }
 
   /** Charges a product of two sums of monomials. */
   Optional<String> chargeProduct(int left, int right) {
@@ -58,9 +81,25 @@ final class WorkLimit {
   }
 
   private Optional<String> overWork() {
-    return scalarSteps > MOST_SCALAR_STEPS || matrixSteps > MOST_MATRIX_STEPS
+    return scalarSteps > mostScalarSteps || matrixSteps > mostMatrixSteps
         ? Optional.of("the expressions of this case take too much work to expand; simplify them")
         : Optional.empty();
+  }
+
+  /** Charges the memory of a finished expression. */
+  Optional<String> chargeKept(Value value) {
+    if (value instanceof Value.Array array) {
+      for (ComplexBall m : array.form().terms().values()) {
+        keptEntries += entries(m);
+      }
+    }
+    return keptEntries > mostKeptEntries
+        ? Optional.of("the operators of this case take too much memory; simplify them")
+        : Optional.empty();
+  }
+
+  private static long entries(ComplexBall matrix) {
+    return (long) matrix.centre().rows() * matrix.centre().columns();
   }
 
   /** What is wrong with the size of a computed value, if anything. */
@@ -105,7 +144,7 @@ final class WorkLimit {
       if (hasHugeExponent(e.getKey())) {
         return Optional.of(HUGE_EXPONENT);
       }
-      entries += (long) m.centre().rows() * m.centre().columns();
+      entries += entries(m);
       if (!(m.normUp() <= LARGEST_NORM)) {
         return Optional.of(TOO_LARGE);
       }

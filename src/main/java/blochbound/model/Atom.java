@@ -21,7 +21,13 @@ public sealed interface Atom extends Comparable<Atom> {
 
   @Override
   default int compareTo(Atom other) {
-    return key().compareTo(other.key());
+    // Parameters come first, by position; the rest is rare and compared by its text.
+    if (this instanceof ParameterAtom a && other instanceof ParameterAtom b) {
+      return Integer.compare(a.index(), b.index());
+    }
+    boolean first = this instanceof ParameterAtom;
+    boolean second = other instanceof ParameterAtom;
+    return first == second ? key().compareTo(other.key()) : first ? -1 : 1;
   }
 
   /**
@@ -32,7 +38,7 @@ public sealed interface Atom extends Comparable<Atom> {
   record ParameterAtom(int index) implements Atom {
     @Override
     public String key() {
-      return String.format(java.util.Locale.ROOT, "p%04d", index);
+      return "p" + (10_000 + index);
     }
 
     @Override

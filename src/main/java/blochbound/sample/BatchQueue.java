@@ -40,7 +40,7 @@ final class BatchQueue {
   synchronized Batch take() {
     if (remaining > 0 && stop.get()) {
       end(Outcome.STOPPED);
-    } else if (remaining > 0 && next > 0 && System.nanoTime() - start > time.toNanos()) {
+    } else if (remaining > 0 && next > 0 && isLate()) {
       end(Outcome.OUT_OF_TIME);
     }
     int wanted = Math.min(batchSize, remaining);
@@ -50,6 +50,10 @@ final class BatchQueue {
       end(Outcome.OUT_OF_CANDIDATES);
     }
     return new Batch(next++, devices);
+  }
+
+  private boolean isLate() {
+    return Duration.ofNanos(System.nanoTime() - start).compareTo(time) > 0;
   }
 
   private void end(Outcome reason) {

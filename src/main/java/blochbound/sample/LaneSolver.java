@@ -22,8 +22,13 @@ import java.util.Optional;
  * is marked as not unique. Generators whose factors fill too much are solved one by one.
  */
 public final class LaneSolver {
-  /** Root of the sum of the squared multipliers above which a lane is solved again. */
-  public static final double GROWTH_LIMIT = 1e3;
+  /**
+   * Root of the sum of the squared multipliers above which a lane is solved again.
+   *
+   * <p>Below, a zero pivot is hidden by rounding to at most about 1e5 u = 1e-11 of the others,
+   * which {@link #SPREAD_LIMIT} sees; what accuracy growth costs is seen by the residual.
+   */
+  public static final double GROWTH_LIMIT = 1e5;
 
   /** Ratio of pivots above which a lane is solved again: only such a lane may be not unique. */
   public static final double SPREAD_LIMIT = 1e9;

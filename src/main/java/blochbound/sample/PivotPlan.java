@@ -26,6 +26,9 @@ final class PivotPlan {
   private final int[] columnOrder;
   private final boolean[] rowDone;
   private final boolean[] columnDone;
+  private final int[] rowCount;
+  private final int[] columnCount;
+  private final double[] columnMax;
 
   private PivotPlan(double[][] matrix, boolean[][] pattern) {
     n = matrix.length;
@@ -35,6 +38,9 @@ final class PivotPlan {
     columnOrder = new int[n];
     rowDone = new boolean[n];
     columnDone = new boolean[n];
+    rowCount = new int[n];
+    columnCount = new int[n];
+    columnMax = new double[n];
   }
 
   /**
@@ -58,23 +64,12 @@ final class PivotPlan {
 
   /** Picks the pivot of step k; false when no entry is left that is not negligible. */
   private boolean choose(int k, double negligible) {
-    int[] rowCount = new int[n];
-    int[] columnCount = new int[n];
-    double[] columnMax = new double[n];
-    for (int i = 0; i < n; i++) {
-      for (int j = 0; j < n; j++) {
-        if (!rowDone[i] && !columnDone[j] && pattern[i][j]) {
-          rowCount[i]++;
-          columnCount[j]++;
-          columnMax[j] = Math.max(columnMax[j], Math.abs(work[i][j]));
-        }
-      }
-    }
+    countEntries();
     long leastFill = Long.MAX_VALUE;
     double bestShare = 0;
     for (int i = 0; i < n; i++) {
       for (int j = 0; j < n; j++) {
-        if (rowDone[i] || columnDone[j] || !(Math.abs(work[i][j]) > negligible)) {
+        if (!isActive(i, j) || !(Math.abs(work[i][j]) > negligible)) {
           continue;
         }
         double share = Math.abs(work[i][j]) / columnMax[j];
@@ -88,6 +83,26 @@ final class PivotPlan {
       }
     }
     return leastFill < Long.MAX_VALUE;
+  }
+
+  private boolean isActive(int row, int column) {
+    return !rowDone[row] && !columnDone[column] && pattern[row][column];
+  }
+
+  /** Entries in each row and column that are left, and the largest of each column. */
+  private void countEntries() {
+    Arrays.fill(rowCount, 0);
+    Arrays.fill(columnCount, 0);
+    Arrays.fill(columnMax, 0);
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < n; j++) {
+        if (isActive(i, j)) {
+          rowCount[i]++;
+          columnCount[j]++;
+          columnMax[j] = Math.max(columnMax[j], Math.abs(work[i][j]));
+        }
+      }
+    }
   }
 
   private void eliminate(int row, int column) {

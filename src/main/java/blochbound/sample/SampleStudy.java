@@ -4,6 +4,7 @@ import blochbound.check.Check;
 import blochbound.generator.BlochGenerator;
 import blochbound.measure.LocatedMeasure;
 import blochbound.model.Requirement.Sense;
+import java.time.Duration;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -32,7 +33,7 @@ public final class SampleStudy {
 
   /** Number of devices for n unknowns when the options leave it open. */
   public static int defaultCount(int unknowns) {
-    return unknowns <= 63 ? 20_000 : unknowns <= 255 ? 2_000 : 200;
+    return unknowns <= 15 ? 10_000 : unknowns <= 63 ? 5_000 : unknowns <= 255 ? 1_000 : 200;
   }
 
   /**
@@ -54,10 +55,12 @@ public final class SampleStudy {
       SampleOptions options,
       AtomicBoolean stop) {
     Check.that(measures.size() == senses.size(), "one sense for each measure");
+    long start = System.nanoTime();
     DeviceSampler sampler = new DeviceSampler(generator.space(), options.kind(), options.seed());
     LaneSolver solver = new LaneSolver(generator);
     int count = count(generator, options);
-    BatchQueue queue = new BatchQueue(sampler, solver.lanes(), count, options.time(), stop);
+    Duration left = options.time().minusNanos(System.nanoTime() - start);
+    BatchQueue queue = new BatchQueue(sampler, solver.lanes(), count, left, stop);
     List<BatchEvaluation.Values> batches =
         inParallel(
             options.threads(),

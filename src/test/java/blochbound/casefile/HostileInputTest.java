@@ -55,27 +55,6 @@ class HostileInputTest {
   }
 
   @Test
-  void workOverManyExpressionsIsLimited() {
-    String factor = "(X@a + Y@a * x + Z@a * y + x * y * X@b + x * x * Z@b)";
-    String product = factor + (" * " + factor).repeat(20);
-    String text =
-        CaseText.dimensionless()
-            .set(
-                "sites",
-                "{"
-                    + names("s", 4, ": {levels: 2}, ")
-                    + ": {levels: 2}, a: {levels: 2}, b: {levels: 2}}")
-            .set("parameters", "{x: {nominal: 1}, y: {nominal: 1}}")
-            .set("hamiltonian", "0")
-            .set("jumps", ("\n- {operator: " + product + "}").repeat(100))
-            .text();
-    String faults = CaseText.faults(text);
-    assertTrue(
-        faults.contains("the expressions of this case take too much work to expand; simplify them"),
-        faults);
-  }
-
-  @Test
   void namedNumbersCannotGrowWithoutLimit() {
     String doubling =
         "{a0: x, "

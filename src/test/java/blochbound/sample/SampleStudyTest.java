@@ -182,8 +182,8 @@ class SampleStudyTest {
   @Test
   void countFollowsTheSize() {
     // [common practice, no source] chosen so that a default run takes about a second
-    assertEquals(20_000, SampleStudy.defaultCount(63));
-    assertEquals(2_000, SampleStudy.defaultCount(255));
+    assertEquals(5_000, SampleStudy.defaultCount(63));
+    assertEquals(1_000, SampleStudy.defaultCount(255));
     assertEquals(200, SampleStudy.defaultCount(1023));
   }
 
