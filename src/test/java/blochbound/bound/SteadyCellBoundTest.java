@@ -250,7 +250,8 @@ class SteadyCellBoundTest {
     // [closed form] 50/(50 + 1.2 + y), y from -reach to reach: |w|_2 = sqrt(0.14) on the ellipsoid,
     // |w|_inf = 0.3 on the diamond
     assertTrue(high >= 50 / (51.2 - reach));
-    // [closed form] first order, and the second-order remainder |w|^2/s^2 of the multinomial theorem
+    // [closed form] first order, and the second-order remainder |w|^2/s^2 of the multinomial
+    // theorem
     double first = 50 / 51.2 * (1 + reach / 51.2);
     assertEquals(first + reach * reach / (51.2 * 51.2), high, 1e-10);
   }
