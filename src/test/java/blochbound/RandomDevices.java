@@ -3,6 +3,7 @@ package blochbound;
 import blochbound.interval.ExactNumber;
 import blochbound.linalg.ComplexBall;
 import blochbound.linalg.ComplexMatrix;
+import blochbound.model.Atom.Function;
 import blochbound.model.Ball;
 import blochbound.model.Coefficient;
 import blochbound.model.Device;
@@ -47,8 +48,7 @@ public final class RandomDevices {
         IntStream.range(0, shape.length)
             .mapToObj(
                 s ->
-                    new Site(
-                        "s" + s, IntStream.range(0, shape[s]).mapToObj(k -> "l" + k).toList()))
+                    new Site("s" + s, IntStream.range(0, shape[s]).mapToObj(k -> "l" + k).toList()))
             .toList());
   }
 
@@ -70,7 +70,8 @@ public final class RandomDevices {
   }
 
   /**
-   * A device with 1 to {@code most} parameters: fields, amplitudes inside jumps, positive rates.
+   * A device with 1 to {@code most} parameters: fields, amplitudes inside jumps, rates that are
+   * polynomials, reciprocals or smooth functions.
    *
    * @param random source of the draws
    * @param shape level counts
@@ -91,7 +92,7 @@ public final class RandomDevices {
     List<Jump> jumps = new ArrayList<>();
     for (int k = 0; k < count; k++) {
       Scalar p = Scalar.parameter(k);
-      switch (random.nextInt(4)) {
+      switch (random.nextInt(6)) {
         case 0 -> {
           parameters.add(parameter(k, -1, 1, isCentred));
           hamiltonian = hamiltonian.plus(exact(hermitian(random, n)).times(p));
@@ -104,14 +105,34 @@ public final class RandomDevices {
           parameters.add(parameter(k, 0.02, 1, isCentred));
           jumps.add(new Jump(p, exact(matrix(random, n))));
         }
-        default -> {
+        case 3 -> {
           parameters.add(parameter(k, 0.02, 1, isCentred));
           rate = rate.times(p).plus(Scalar.constant(half()));
+        }
+        case 4 -> {
+          // A weak jump makes a slow device; a power of two keeps its entries exact.
+          parameters.add(parameter(k, 0.1, 1, isCentred));
+          ComplexMatrix weak = matrix(random, n).scale(Math.scalb(1.0, -random.nextInt(12)));
+          jumps.add(new Jump(p.reciprocal(), exact(weak)));
+        }
+        default -> {
+          parameters.add(parameter(k, 0.1, 1, isCentred));
+          jumps.add(new Jump(smooth(p), exact(matrix(random, n))));
         }
       }
     }
     jumps.add(new Jump(rate, amplitude));
     return new Device(space(shape), parameters, ball, hamiltonian, jumps);
+  }
+
+  /** A positive function of a positive parameter that is no polynomial. */
+  private Scalar smooth(Scalar p) {
+    return switch (random.nextInt(4)) {
+      case 0 -> p.apply(Function.EXP);
+      case 1 -> p.apply(Function.SQRT);
+      case 2 -> p.apply(Function.COS);
+      default -> p.plus(Scalar.constant(half())).reciprocal();
+    };
   }
 
   private static Coefficient half() {

@@ -25,7 +25,10 @@ public final class TestCases {
   public static DesignCase read(String text) {
     try {
       return CaseReader.read(
-          "format: blochbound-case/1\n" + text, "test.yaml", Path.of("."), RequirementRule.OPTIONAL);
+          "format: blochbound-case/1\n" + text,
+          "test.yaml",
+          Path.of("."),
+          RequirementRule.OPTIONAL);
     } catch (CaseFaultException e) {
       throw new IllegalArgumentException(e.faults().toString(), e);
     }

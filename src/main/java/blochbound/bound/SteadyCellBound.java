@@ -25,7 +25,7 @@ public final class SteadyCellBound implements CellBound {
   private static final int MOST_CANDIDATES = 4;
 
   /** Share of the bracket that a new affine bound must promise to be worth its cost. */
-  private static final double WORTHWHILE_MISMATCH = 0.1;
+  private static final double WORTHWHILE_MISMATCH = 0.5;
 
   private final BlochGenerator generator;
   private final LocatedMeasure located;

@@ -40,8 +40,7 @@ class BallConstraintTest {
 
   private static boolean isIn(Region region, double[] z) {
     for (int j = 0; j < z.length; j++) {
-      BigDecimal distance =
-          new BigDecimal(z[j]).subtract(new BigDecimal(region.centre(j))).abs();
+      BigDecimal distance = new BigDecimal(z[j]).subtract(new BigDecimal(region.centre(j))).abs();
       if (distance.compareTo(new BigDecimal(region.halfWidth(j))) > 0) {
         return false;
       }
@@ -123,7 +122,9 @@ class BallConstraintTest {
   }
 
   @ParameterizedTest
-  @EnumSource(value = Norm.class, names = {"ELLIPSOID", "DIAMOND"})
+  @EnumSource(
+      value = Norm.class,
+      names = {"ELLIPSOID", "DIAMOND"})
   void theMultiplierLowersThePolynomialInsideTheBall(Norm norm) {
     SplittableRandom random = new SplittableRandom(12);
     BallConstraint ball = new BallConstraint(norm);

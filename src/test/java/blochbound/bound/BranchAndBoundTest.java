@@ -69,8 +69,7 @@ class BranchAndBoundTest {
   }
 
   private static Interval mcCormick(Interval[] x) {
-    return x[0]
-        .plus(x[1])
+    return x[0].plus(x[1])
         .sin()
         .plus(x[0].minus(x[1]).square())
         .minus(n(1.5).times(x[0]))
@@ -106,12 +105,7 @@ class BranchAndBoundTest {
 
     BranchOutcome run(BranchOptions options) {
       return BranchAndBound.minimise(
-          cells(),
-          low.length,
-          norm,
-          options,
-          BranchAndBound.Start.none(),
-          new AtomicBoolean());
+          cells(), low.length, norm, options, BranchAndBound.Start.none(), new AtomicBoolean());
     }
 
     void brackets(BranchOutcome outcome) {
@@ -191,8 +185,7 @@ class BranchAndBoundTest {
   @ParameterizedTest
   @MethodSource("problems")
   void textbookMinimaAreBracketedToTheGap(Problem problem) {
-    BranchOutcome outcome =
-        problem.run(BranchOptions.toGap(problem.gap).withRegions(60000));
+    BranchOutcome outcome = problem.run(BranchOptions.toGap(problem.gap).withRegions(60000));
     problem.brackets(outcome);
     assertEquals(Reason.NARROW, outcome.reason(), "" + outcome.regions());
     assertTrue(outcome.attained() - outcome.certifiedLower() <= problem.gap);
@@ -286,23 +279,15 @@ class BranchAndBoundTest {
   private static CellBound.Cell atVertex(
       CellBound inner, Region region, Function<Interval[], Interval> f) {
     CellBound.Cell cell = inner.bound(region, 0);
-    double[] vertex =
-        java.util.Arrays.stream(region.centre()).map(c -> c < 0 ? -1 : 1).toArray();
-    Interval[] x =
-        java.util.Arrays.stream(vertex).mapToObj(Interval::of).toArray(Interval[]::new);
+    double[] vertex = java.util.Arrays.stream(region.centre()).map(c -> c < 0 ? -1 : 1).toArray();
+    Interval[] x = java.util.Arrays.stream(vertex).mapToObj(Interval::of).toArray(Interval[]::new);
     return new CellBound.Cell(
         cell.certifiedLower(), vertex, f.apply(x).middle(), cell.split(), cell.certificate());
   }
 
   private static BranchOptions deciding(double limit) {
     return new BranchOptions(
-        Double.POSITIVE_INFINITY,
-        0,
-        Double.NaN,
-        limit,
-        Duration.ofMinutes(1),
-        100000,
-        1);
+        Double.POSITIVE_INFINITY, 0, Double.NaN, limit, Duration.ofMinutes(1), 100000, 1);
   }
 
   @Test
@@ -374,8 +359,7 @@ class BranchAndBoundTest {
   @Test
   void whatCannotBeSplitEndsTheWork() {
     CellBound constant =
-        (region, enough) ->
-            new CellBound.Cell(0, region.centre(), 1, -1, Optional.empty());
+        (region, enough) -> new CellBound.Cell(0, region.centre(), 1, -1, Optional.empty());
     BranchOutcome outcome =
         BranchAndBound.minimise(
             () -> constant,

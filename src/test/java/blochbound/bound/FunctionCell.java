@@ -22,8 +22,7 @@ final class FunctionCell implements CellBound {
    * @param high upper ends
    * @param norm norm of the ball, for candidates
    */
-  FunctionCell(
-      Function<Interval[], Interval> function, double[] low, double[] high, Norm norm) {
+  FunctionCell(Function<Interval[], Interval> function, double[] low, double[] high, Norm norm) {
     this.function = function;
     this.low = low.clone();
     this.high = high.clone();
@@ -54,9 +53,7 @@ final class FunctionCell implements CellBound {
       double h = region.halfWidth(j);
       x[j] = scaled(j, Interval.of(Math.nextDown(c - h), Math.nextUp(c + h)));
       split =
-          h * (high[j] - low[j]) > region.halfWidth(split) * (high[split] - low[split])
-              ? j
-              : split;
+          h * (high[j] - low[j]) > region.halfWidth(split) * (high[split] - low[split]) ? j : split;
     }
     double lower = function.apply(x).lower();
     double[] candidate = ball.project(region.centre());

@@ -58,10 +58,33 @@ class PolynomialRangeTest {
     assertTrue(value(c, table, guess).compareTo(bound) >= 0);
     for (int k = 0; k < 40; k++) {
       boolean isVertex = k % 2 == 0;
-      double[] x =
-          random.doubles(m, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
+      double[] x = random.doubles(m, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
       assertTrue(value(c, table, x).compareTo(bound) >= 0, () -> Arrays.toString(x));
     }
+  }
+
+  @ParameterizedTest(name = "seed {0}")
+  @MethodSource("seeds")
+  void multilinearFormsAreBoundedBelowTheirBestVertex(long seed) {
+    SplittableRandom random = new SplittableRandom(seed);
+    int m = random.nextInt(2, 5);
+    MultiIndexTable table = MultiIndexTable.of(m, 3);
+    double[] c = new double[table.firstOfDegree(3)];
+    for (int a = 0; a < c.length; a++) {
+      // Small whole numbers: every sum is exact, so only the rounding term keeps a distance.
+      boolean isSquare = table.degree(a) == 2 && table.isEven(a);
+      c[a] = isSquare ? 0 : random.nextInt(-4, 5);
+    }
+    double least = Double.POSITIVE_INFINITY;
+    for (int vertex = 0; vertex < 1 << m; vertex++) {
+      double[] x = new double[m];
+      for (int j = 0; j < m; j++) {
+        x[j] = (vertex >> j) % 2 == 0 ? -1 : 1;
+      }
+      least = Math.min(least, value(c, table, x).doubleValue());
+    }
+    // [closed form] a multilinear form is least at a vertex of the cube
+    assertTrue(minimum(c, table) <= least);
   }
 
   @Test
@@ -88,6 +111,18 @@ class PolynomialRangeTest {
     c[table.plus(1, 1)] = 1;
     // [closed form] 3x + y/2 + xy: x = -1 is sure, then y/2 - y = -y/2 falls to y = 1
     assertEquals(-3.5, minimum(c, table), 1e-12);
+  }
+
+  @Test
+  void aVariableThatIsNotSureIsNotFixed() {
+    MultiIndexTable table = MultiIndexTable.of(2, 2);
+    double[] c = new double[table.count()];
+    c[1] = 1;
+    c[2] = 2;
+    c[table.plus(1, 1)] = 1.5;
+    // [closed form] x + 2y + 1.5 xy is -2.5 at (1, -1), although x alone would choose -1
+    assertEquals(-2.5, minimum(c, table), 1e-12);
+    assertTrue(minimum(c, table) <= -2.5);
   }
 
   @Test

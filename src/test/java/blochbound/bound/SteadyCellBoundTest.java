@@ -6,7 +6,12 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import blochbound.TestCases;
 import blochbound.bound.Brackets.Bracket;
 import blochbound.bound.BranchOutcome.Reason;
+import blochbound.generator.BlochGenerator;
+import blochbound.measure.LocatedMeasure;
+import blochbound.measure.Measures;
 import blochbound.model.DesignCase;
+import blochbound.model.Region;
+import blochbound.model.Requirement.Sense;
 import java.util.Arrays;
 import java.util.Locale;
 import java.util.SplittableRandom;
@@ -158,11 +163,7 @@ class SteadyCellBoundTest {
         TestCases.plain(
             "sites: {q: {levels: [g, e]}}",
             String.format(
-                Locale.ROOT,
-                "parameters: {t: {nominal: %s, range: [%s, %s]}}",
-                nominal,
-                low,
-                high),
+                Locale.ROOT, "parameters: {t: {nominal: %s, range: [%s, %s]}}", nominal, low, high),
             "jumps: [{rate: 1+t, operator: lower@q}, {rate: 0.1*(1+t), operator: raise@q}]",
             requirement("population(q, g)", "atLeast: 0.9"));
     Bracket bracket = Brackets.of(touching, BranchOptions.toGap(1e-3).withRegions(100));
@@ -228,6 +229,33 @@ class SteadyCellBoundTest {
     assertEquals(plain.low(), scaled.low(), 1e-11);
   }
 
+  @ParameterizedTest
+  @CsvSource({"2, 0.374165738677394", "1, 0.3"})
+  void wholeBallsAreBoundedSharply(int norm, double reach) {
+    DesignCase designCase =
+        TestCases.plain(
+            "sites: {q: {levels: [g, e]}}",
+            "parameters:",
+            "  a: {nominal: 0.4, tolerance: 0.3}",
+            "  b: {nominal: 0.4, tolerance: 0.2}",
+            "  c: {nominal: 0.4, tolerance: 0.1}",
+            "ball: {norm: " + norm + ", radius: 1}",
+            "jumps: [{rate: 50, operator: raise@q}, {rate: a+b+c, operator: lower@q}]",
+            requirement("population(q, e)", "atMost: 1"));
+    BlochGenerator generator = BlochGenerator.stationary(designCase.device());
+    LocatedMeasure located =
+        Measures.of(designCase.requirements().get(0).measure(), designCase.device().space());
+    SteadyCellBound bound = new SteadyCellBound(generator, located, Sense.AT_MOST, 1);
+    double high = -bound.bound(Region.whole(3), Double.POSITIVE_INFINITY).certifiedLower();
+    // [closed form] 50/(50 + 1.2 + y), y from -reach to reach: |w|_2 = sqrt(0.14) on the ellipsoid,
+    // |w|_inf = 0.3 on the diamond
+    assertTrue(high >= 50 / (51.2 - reach));
+    // [closed form] first order, and the second-order remainder |w|^2/s^2 of the multinomial
+    // theorem
+    double first = 50 / 51.2 * (1 + reach / 51.2);
+    assertEquals(first + reach * reach / (51.2 * 51.2), high, 1e-10);
+  }
+
   @Test
   void cellsAreBelowEverySampleOfTheirRegion() {
     DesignCase designCase = detunedPair(0.5, 0.2, 0.5, 0.2);
@@ -241,10 +269,7 @@ class SteadyCellBoundTest {
               for (int k = 0; k < 30; k++) {
                 boolean isVertex = k < 6;
                 double[] x =
-                    random
-                        .doubles(2, -1, 1)
-                        .map(v -> isVertex ? Math.copySign(1, v) : v)
-                        .toArray();
+                    random.doubles(2, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
                 double value = Brackets.value(designCase, c.region().at(x));
                 // Samples of the concurrence are rounded by up to about 1e-9 here.
                 assertTrue(c.certifiedLower() <= value + 1e-9);

@@ -30,8 +30,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 class UniquenessProofTest {
   private static Outcome run(Device device, long regions) {
-    return UniquenessProof.run(
-        BlochGenerator.stationary(device), regions, Duration.ofSeconds(20));
+    return UniquenessProof.run(BlochGenerator.stationary(device), regions, Duration.ofSeconds(20));
   }
 
   @Test
@@ -114,8 +113,7 @@ class UniquenessProofTest {
   @Test
   void withoutParametersTheSingleDeviceIsDecided() {
     Device device =
-        TestCases.device(
-            "sites: {q: {levels: [g, e]}}", "jumps: [{rate: 0.4, operator: lower@q}]");
+        TestCases.device("sites: {q: {levels: [g, e]}}", "jumps: [{rate: 0.4, operator: lower@q}]");
     assertInstanceOf(Outcome.Unique.class, run(device, 10));
   }
 
@@ -164,8 +162,7 @@ class UniquenessProofTest {
       jumps.add(new Jump(Scalar.ONE, v));
     }
     Device device =
-        new Device(
-            RandomDevices.space(n), parameters, Ball.unitBox(), hamiltonian, jumps);
+        new Device(RandomDevices.space(n), parameters, Ball.unitBox(), hamiltonian, jumps);
     // [closed form] the projector on either sector is conserved: each has its stationary state
     assertFalse(run(device, 60) instanceof Outcome.Unique);
   }

@@ -35,7 +35,8 @@ class VerifiedSteadyStateTest {
     return LongStream.range(0, Math.min(400, Integer.getInteger("blochbound.soak", 14)));
   }
 
-  private static void contains(BlochGenerator generator, VerifiedSteadyState verified, PreciseState truth) {
+  private static void contains(
+      BlochGenerator generator, VerifiedSteadyState verified, PreciseState truth) {
     Hermitian state = generator.basis().matrix(verified.state());
     BigDecimal transform = new BigDecimal(2 * generator.basis().transformError());
     BigDecimal allowed = new BigDecimal(verified.distance()).add(transform);

@@ -89,7 +89,9 @@ class BlochBasisTest {
       for (BlochBasis.Entry e : basis.entriesOf(k)) {
         BigDecimal x = new BigDecimal(matrix.matrix().re(e.column(), e.row()));
         BigDecimal y = new BigDecimal(matrix.matrix().im(e.column(), e.row()));
-        sum = sum.add(x.multiply(new BigDecimal(e.re()))).subtract(y.multiply(new BigDecimal(e.im())));
+        sum =
+            sum.add(x.multiply(new BigDecimal(e.re())))
+                .subtract(y.multiply(new BigDecimal(e.im())));
       }
       BigDecimal root = new BigDecimal(basis.squaredNorm(k)).sqrt(BigReference.DIGITS);
       BigDecimal exact = sum.divide(root, BigReference.DIGITS);

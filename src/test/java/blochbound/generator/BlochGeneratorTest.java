@@ -41,8 +41,7 @@ class BlochGeneratorTest {
   @ValueSource(longs = {1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16})
   void theSumOfTermsIsTheSuperoperator(long seed) {
     SplittableRandom random = new SplittableRandom(seed);
-    Device device =
-        RandomDevices.draw(random, RandomDevices.shape(random), 5, Ball.unitBox());
+    Device device = RandomDevices.draw(random, RandomDevices.shape(random), 5, Ball.unitBox());
     BlochGenerator generator = BlochGenerator.of(device);
     double[] z = random.doubles(generator.space().coordinates(), -1, 1).toArray();
     double[] p = generator.space().parametersAt(z);
@@ -70,8 +69,7 @@ class BlochGeneratorTest {
   @ValueSource(longs = {1, 2, 3, 4})
   void theTraceIsKeptExactly(long seed) {
     SplittableRandom random = new SplittableRandom(seed);
-    Device device =
-        RandomDevices.draw(random, RandomDevices.shape(random), 5, Ball.unitBox());
+    Device device = RandomDevices.draw(random, RandomDevices.shape(random), 5, Ball.unitBox());
     for (GeneratorTerm term : BlochGenerator.of(device).terms()) {
       // [invariant] tr L[rho] = 0: nothing is stored in the first row
       term.matrix().forEach((row, column, entry) -> assertTrue(row > 0 && entry != 0));

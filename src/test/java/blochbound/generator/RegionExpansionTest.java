@@ -15,7 +15,6 @@ import java.math.BigDecimal;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.SplittableRandom;
-
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -48,8 +47,7 @@ class RegionExpansionTest {
       int row = space.coordinateOf(i);
       if (row >= 0) {
         // [closed form] Cholesky factor of two correlated coordinates: (1, 0), (r, sqrt(1 - r^2))
-        BigDecimal t =
-            row == 0 ? z.get(0) : r.multiply(z.get(0)).add(rest.multiply(z.get(1)));
+        BigDecimal t = row == 0 ? z.get(0) : r.multiply(z.get(0)).add(rest.multiply(z.get(1)));
         value = value.add(t.multiply(decimal(space.halfWidth(i))));
       }
       p.add(value);

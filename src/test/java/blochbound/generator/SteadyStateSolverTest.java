@@ -75,8 +75,7 @@ class SteadyStateSolverTest {
   })
   void relaxationTimesGiveTheBlochSteadyState(
       double t1, double tPhi, double om, double d, double excited, double u, double v, double w) {
-    Hermitian rho =
-        emitter(drive(om, d), jump(1 / t1, "lower@q"), jump(1 / (2 * tPhi), "Z@q"));
+    Hermitian rho = emitter(drive(om, d), jump(1 / t1, "lower@q"), jump(1 / (2 * tPhi), "Z@q"));
     assertEquals(excited, rho.re(1, 1), 1e-12);
     // Here the ground state comes first: Y and Z change their signs.
     assertEquals(u, 2 * rho.re(0, 1), 1e-12);
@@ -141,16 +140,17 @@ class SteadyStateSolverTest {
   // [published] Stannigel, Rabl, Zoller, New J. Phys. 14 (2012) 063014, from memory; the formula
   // C = 2 a^2/(D^2 + 2 a^2) follows from its pure state
   @ParameterizedTest
-  @CsvSource({"0.2, 0.1, 0.888888888888889", "0.5, 1, 0.333333333333333", "1, 0.3, 0.956937799043062"})
+  @CsvSource({
+    "0.2, 0.1, 0.888888888888889",
+    "0.5, 1, 0.333333333333333",
+    "1, 0.3, 0.956937799043062"
+  })
   void aPairWithOppositeDetuningsSettlesInAPureEntangledState(double a, double d, double c) {
     Device device =
         TestCases.device(
             "sites: {l: {levels: [g, e]}, r: {levels: [g, e]}}",
             String.format(
-                Locale.ROOT,
-                "hamiltonian: \"%s*(X@l+X@r) + %s*(|e><e|@l - |e><e|@r)\"",
-                a,
-                d),
+                Locale.ROOT, "hamiltonian: \"%s*(X@l+X@r) + %s*(|e><e|@l - |e><e|@r)\"", a, d),
             "jumps: [{operator: lower@l + lower@r}]");
     Hermitian rho = steadyState(device);
     assertEquals(1, rho.inner(rho), 1e-12);
@@ -220,8 +220,7 @@ class SteadyStateSolverTest {
             new MeasureSpec.Population(0, List.of(0)));
     for (MeasureSpec spec : specs) {
       StationaryMeasure measure =
-          new StationaryMeasure(
-              generator, Measures.of(spec, device.space()), Sense.AT_LEAST);
+          new StationaryMeasure(generator, Measures.of(spec, device.space()), Sense.AT_LEAST);
       int m = generator.space().coordinates();
       double[] z = random.doubles(m, -0.9, 0.9).toArray();
       double[] gradient = new double[m];

@@ -34,8 +34,7 @@ class TaylorModelTest {
     points.clear();
     for (int k = 0; k < 6; k++) {
       boolean isVertex = k < 2;
-      double[] x =
-          random.doubles(m, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
+      double[] x = random.doubles(m, -1, 1).map(v -> isVertex ? Math.copySign(1, v) : v).toArray();
       points.add(x);
     }
   }
@@ -82,8 +81,7 @@ class TaylorModelTest {
   private static Pair shifted(Pair a) {
     double c = Math.max(0, -a.model.range().lower()) + 0.25;
     Pair constant = a.with(a.model.times(Interval.ZERO), v -> BigDecimal.ZERO);
-    TaylorModel sum =
-        a.model.plus(constant.model.compose(Function.EXP).times(Interval.of(c)));
+    TaylorModel sum = a.model.plus(constant.model.compose(Function.EXP).times(Interval.of(c)));
     return a.with(sum, v -> v.add(new BigDecimal(c)));
   }
 
@@ -147,8 +145,10 @@ class TaylorModelTest {
             distance.compareTo(new BigDecimal(pair.model.remainder())) <= 0,
             "seed " + seed + ": " + distance + " above " + pair.model.remainder());
       }
-      assertTrue(range.contains(value.doubleValue()) || range.contains(Math.nextUp(value.doubleValue()))
-          || range.contains(Math.nextDown(value.doubleValue())));
+      assertTrue(
+          range.contains(value.doubleValue())
+              || range.contains(Math.nextUp(value.doubleValue()))
+              || range.contains(Math.nextDown(value.doubleValue())));
     }
   }
 
@@ -171,8 +171,7 @@ class TaylorModelTest {
   @Test
   void aSquareRootThatReachesZeroIsAConstantWithItsWholeRange() {
     MultiIndexTable table = MultiIndexTable.of(1, 2);
-    TaylorModel model =
-        TaylorModel.affine(table, 2, new double[] {1}, 1, 0).compose(Function.SQRT);
+    TaylorModel model = TaylorModel.affine(table, 2, new double[] {1}, 1, 0).compose(Function.SQRT);
     assertEquals(1, model.size());
     // [closed form] the square root takes [0, 2] to [0, sqrt 2]
     assertTrue(model.range().contains(Interval.of(0, Math.sqrt(2))));

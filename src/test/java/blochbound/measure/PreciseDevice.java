@@ -131,8 +131,7 @@ public final class PreciseDevice {
       for (int column = 0; column < n * n; column++) {
         BigDecimal x = new BigDecimal(rho.re(column / n, column % n));
         BigDecimal y = new BigDecimal(rho.im(column / n, column % n));
-        sumRe =
-            sumRe.add(re[row][column].multiply(x)).subtract(im[row][column].multiply(y));
+        sumRe = sumRe.add(re[row][column].multiply(x)).subtract(im[row][column].multiply(y));
         sumIm = sumIm.add(re[row][column].multiply(y)).add(im[row][column].multiply(x));
       }
       out[0][row] = sumRe;
@@ -222,8 +221,7 @@ public final class PreciseDevice {
     for (int j = k; j < a.length; j++) {
       a[j] =
           a[j].subtract(x.multiply(fromA[j]).subtract(y.multiply(fromB[j])), PreciseMatrix.DIGITS);
-      b[j] =
-          b[j].subtract(x.multiply(fromB[j]).add(y.multiply(fromA[j])), PreciseMatrix.DIGITS);
+      b[j] = b[j].subtract(x.multiply(fromB[j]).add(y.multiply(fromA[j])), PreciseMatrix.DIGITS);
     }
   }
 
@@ -254,7 +252,7 @@ public final class PreciseDevice {
     /**
      * A measure by its definition; errs by less than 1e-20.
      *
-     * @param spec the measure; a negativity must be that of the first of two sites
+     * @param spec the measure; a negativity must be that of the first site
      * @param dimensions level counts of the sites
      */
     public BigDecimal value(MeasureSpec spec, int... dimensions) {
@@ -277,7 +275,7 @@ public final class PreciseDevice {
         return PreciseMeasures.traceDistance(rho, reference);
       }
       if (spec instanceof MeasureSpec.Negativity) {
-        return PreciseMeasures.negativity(rho, dimensions[1]);
+        return PreciseMeasures.negativity(rho, rho.rows / dimensions[0]);
       }
       if (spec instanceof MeasureSpec.Concurrence) {
         return PreciseMeasures.concurrence(rho);

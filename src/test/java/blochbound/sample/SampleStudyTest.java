@@ -60,7 +60,7 @@ class SampleStudyTest {
   @ParameterizedTest
   @EnumSource(SamplePoints.class)
   void quantilesAndMeanFollowTheClosedForm(SamplePoints kind) {
-    SampleResult result = run(thermal(), Ball.unitBox(), OPTIONS.withKind(kind));
+    SampleResult result = run(thermal(), Ball.unitBox(), OPTIONS.withKind(kind).withCount(20_000));
     assertEquals(20_000, result.count());
     assertEquals(Outcome.COMPLETE, result.outcome());
     MeasureSample sample = result.measures().get(0);
@@ -182,6 +182,7 @@ class SampleStudyTest {
   @Test
   void countFollowsTheSize() {
     // [common practice, no source] chosen so that a default run takes about a second
+    assertEquals(10_000, SampleStudy.defaultCount(15));
     assertEquals(5_000, SampleStudy.defaultCount(63));
     assertEquals(1_000, SampleStudy.defaultCount(255));
     assertEquals(200, SampleStudy.defaultCount(1023));

@@ -64,7 +64,9 @@ class CertificationTest {
     assertEquals(SteadyStateStatus.Kind.UNIQUE, result.status().orElseThrow().kind());
     List<BigDecimal> point = entangled.worstFound().orElseThrow().point();
     // [independent] worst at both pumps -20 %, both decays 0.03, the shift at either end
-    assertEquals(List.of("0.8", "0.8", "0.03", "0.03"), point.stream().limit(4).map(BigDecimal::toPlainString).toList());
+    assertEquals(
+        List.of("0.8", "0.8", "0.03", "0.03"),
+        point.stream().limit(4).map(BigDecimal::toPlainString).toList());
     assertEquals(8, Math.abs(point.get(4).doubleValue()), 0);
     assertTrue(entangled.worstFound().get().verified());
   }

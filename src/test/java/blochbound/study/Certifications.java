@@ -42,8 +42,7 @@ final class Certifications {
     assertTrue(guaranteed <= found, result.toString());
     result.nominal().ifPresent(n -> assertTrue(found <= sign * n));
     result.sampled().ifPresent(s -> assertTrue(found <= sign * s.worst()));
-    assertTrue(
-        designCase.device().parameterSpace().contains(result.worstFound().get().point()));
+    assertTrue(designCase.device().parameterSpace().contains(result.worstFound().get().point()));
   }
 
   static double guaranteed(RequirementResult result) {
