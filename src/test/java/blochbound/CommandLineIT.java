@@ -41,30 +41,23 @@ class CommandLineIT {
   }
 
   @Test
-  void oneThreadAndOneSeedGiveTheSameResultTwice() throws Exception {
+  void oneThreadAndOneSeedGiveTheSameResultTwiceAndAnotherSeedDrawsOthers() throws Exception {
     SmallCase.coldest(directory, "cold.yaml", "0.14");
-    String[] arguments = {
-      "cold.yaml", "--json", "-", "--seed", "7", "--threads", "1", "--gap", "1e-6"
-    };
-    Result first = certify(arguments);
-    Result second = certify(arguments);
-    assertEquals(0, first.exitCode(), first.err());
-    assertEquals(timeless(first.out()), timeless(second.out()));
-    // [invariant] the seed given
-    assertEquals(7, JsonValue.parse(first.out()).get("seed").number().intValue());
-  }
-
-  @Test
-  void anotherSeedDrawsOtherDevices() throws Exception {
-    SmallCase.coldest(directory, "cold.yaml", "0.14");
-    Result first = certify("cold.yaml", "--json=-", "--seed=1");
-    Result second = certify("cold.yaml", "--json=-", "--seed=2");
-    JsonValue one = JsonValue.parse(first.out()).get("requirements").items().get(0);
-    JsonValue other = JsonValue.parse(second.out()).get("requirements").items().get(0);
-    // [invariant] the number asked for
-    assertEquals(200, one.get("sampled").get("count").number().intValue());
-    assertFalse(
-        one.get("sampled").get("mean").number().equals(other.get("sampled").get("mean").number()));
+    List<String> runs = new ArrayList<>();
+    for (String seed : List.of("7", "7", "8")) {
+      Result run = certify("cold.yaml", "--json=-", "--threads=1", "--gap=1e-6", "--seed", seed);
+      assertEquals(0, run.exitCode(), run.err());
+      runs.add(run.out());
+    }
+    assertEquals(timeless(runs.get(0)), timeless(runs.get(1)));
+    JsonValue one = JsonValue.parse(runs.get(0));
+    JsonValue other = JsonValue.parse(runs.get(2));
+    // [invariant] the seed and the number of devices asked for
+    assertEquals(7, one.get("seed").number().intValue());
+    JsonValue sampled = one.get("requirements").items().get(0).get("sampled");
+    assertEquals(200, sampled.get("count").number().intValue());
+    JsonValue others = other.get("requirements").items().get(0).get("sampled");
+    assertFalse(sampled.get("mean").number().equals(others.get("mean").number()));
   }
 
   @Test
