@@ -27,7 +27,15 @@ public final class BranchAndBound {
   /** Relative width at which a bracket is closed to rounding, whatever was asked. */
   private static final double CLOSED = 1e-10;
 
-  private record Node(Region region, Cell cell, double certifiedLower, long number) {}
+  /** Width below which a gap relative to a vanishing loss is not narrowed. */
+  private static final double LEAST_RELATIVE = 1e-8;
+
+  private record Node(
+      Region region,
+      Cell cell,
+      double certifiedLower,
+      Optional<RegionCertificate> certificate,
+      long number) {}
 
   private final Supplier<CellBound> bounds;
   private final BallConstraint ball;
@@ -46,7 +54,7 @@ public final class BranchAndBound {
   private double[] point;
   private long regions;
   private Optional<Reason> ended = Optional.empty();
-  private Optional<RuntimeException> failure = Optional.empty();
+  private Optional<Throwable> failure = Optional.empty();
 
   private BranchAndBound(
       Supplier<CellBound> bounds, Norm norm, BranchOptions options, AtomicBoolean stop) {
@@ -97,7 +105,7 @@ public final class BranchAndBound {
   private BranchOutcome run(Region whole) {
     CellBound first = bounds.get();
     Cell root = first.bound(whole, enough());
-    accept(whole, root, Double.NEGATIVE_INFINITY);
+    accept(whole, root, Double.NEGATIVE_INFINITY, Optional.empty());
     List<Thread> helpers = new ArrayList<>();
     for (int k = 1; k < options.threads() && !finished(); k++) {
       Thread helper = new Thread(() -> work(bounds.get()), "bound-" + k);
@@ -109,10 +117,11 @@ public final class BranchAndBound {
     for (Thread helper : helpers) {
       joinUninterruptibly(helper);
     }
-    failure.ifPresent(
-        e -> {
-          throw e;
-        });
+    if (failure.isPresent()) {
+      throw failure.get() instanceof RuntimeException e
+          ? e
+          : new IllegalStateException("a worker failed", failure.get());
+    }
     return outcome();
   }
 
@@ -142,7 +151,7 @@ public final class BranchAndBound {
         give(node, halves, cells);
         node = take();
       }
-    } catch (RuntimeException e) {
+    } catch (RuntimeException | Error e) {
       fail(e);
     }
   }
@@ -190,24 +199,27 @@ public final class BranchAndBound {
   private synchronized void give(Node parent, List<Region> halves, List<Cell> cells) {
     working.remove(parent);
     for (int k = 0; k < halves.size(); k++) {
-      accept(halves.get(k), cells.get(k), parent.certifiedLower);
+      accept(halves.get(k), cells.get(k), parent.certifiedLower, parent.certificate);
     }
     notifyAll();
   }
 
-  private synchronized void accept(Region region, Cell cell, double parentLower) {
+  private synchronized void accept(
+      Region region, Cell cell, double parentLower, Optional<RegionCertificate> parentProof) {
     regions++;
     // What holds on the parent holds on its halves; a bound that is no number adds nothing.
-    double own = cell.certifiedLower();
-    double lower = own > parentLower ? own : parentLower;
-    open.add(new Node(region, cell, lower, regions));
+    boolean isBetter = cell.certifiedLower() > parentLower;
+    double lower = isBetter ? cell.certifiedLower() : parentLower;
+    Optional<RegionCertificate> proof =
+        isBetter || parentProof.isEmpty() ? cell.certificate() : parentProof;
+    open.add(new Node(region, cell, lower, proof, regions));
     if (cell.attained() < attained) {
       attained = cell.attained();
       point = cell.candidate();
     }
   }
 
-  private synchronized void fail(RuntimeException e) {
+  private synchronized void fail(Throwable e) {
     failure = failure.or(() -> Optional.of(e));
     ended = Optional.of(Reason.STOPPED);
     notifyAll();
@@ -226,6 +238,7 @@ public final class BranchAndBound {
   private double allowedGap() {
     double loss = options.reference() - attained;
     double relative = options.relativeGap() > 0 && loss > 0 ? options.relativeGap() * loss : 0;
+    relative = Math.max(relative, LEAST_RELATIVE * (1 + Math.abs(attained)));
     boolean onlyRelative = options.relativeGap() > 0 && Double.isInfinite(options.gap());
     return onlyRelative ? relative : Math.max(options.gap(), relative);
   }
@@ -254,26 +267,31 @@ public final class BranchAndBound {
       ended = Optional.of(Reason.TIME);
     } else if (regions >= options.regions()) {
       ended = Optional.of(Reason.REGIONS);
+    } else if (!unsplittable.isEmpty() && smallest(unsplittable) <= lower) {
+      // The bracket cannot become narrower from below.
+      ended = Optional.of(Reason.RESOLUTION);
     }
     return ended.isPresent();
   }
 
   private double certifiedLower() {
-    double lower = open.isEmpty() ? Double.POSITIVE_INFINITY : open.peek().certifiedLower;
-    for (Node node : working) {
-      lower = Math.min(lower, node.certifiedLower);
+    double queued = open.isEmpty() ? Double.POSITIVE_INFINITY : open.peek().certifiedLower;
+    return Math.min(queued, Math.min(smallest(working), smallest(unsplittable)));
+  }
+
+  private static double smallest(List<Node> nodes) {
+    double least = Double.POSITIVE_INFINITY;
+    for (Node node : nodes) {
+      least = Math.min(least, node.certifiedLower);
     }
-    for (Node node : unsplittable) {
-      lower = Math.min(lower, node.certifiedLower);
-    }
-    return lower;
+    return least;
   }
 
   private BranchOutcome outcome() {
     List<RegionCertificate> certificates = new ArrayList<>();
     for (List<Node> nodes : List.of(new ArrayList<>(open), working, unsplittable)) {
       for (Node node : nodes) {
-        node.cell.certificate().ifPresent(certificates::add);
+        node.certificate.ifPresent(certificates::add);
       }
     }
     return new BranchOutcome(

@@ -123,7 +123,7 @@ public final class Certification {
 
   private SteadyStateStatus uniqueness() {
     Duration budget = options.time().dividedBy(10);
-    Duration most = Duration.ofSeconds(2);
+    Duration most = Duration.ofSeconds(6);
     UniquenessProof.Outcome outcome =
         UniquenessProof.run(
             generator, UNIQUENESS_REGIONS, budget.compareTo(most) < 0 ? budget : most);

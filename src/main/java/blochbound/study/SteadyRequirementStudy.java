@@ -80,6 +80,11 @@ final class SteadyRequirementStudy {
       worst = devices.worse(worst, devices.candidate(outcome.point()));
     }
     Devices.Verified verified = devices.verify(worst, outcome.certifiedLower());
+    if (verified.enclosure().isEmpty() && isFarBelow(worst.signed(), outcome.certifiedLower())) {
+      remarks.add(
+          "An unverified value at a device without a proved unique steady state lies beyond the"
+              + " guarantee and was left out; please report this case.");
+    }
     Verdict verdict = verdict(outcome, verified);
     return new RequirementResult(
         requirement,
@@ -91,6 +96,10 @@ final class SteadyRequirementStudy {
         sampledTruth(samples, measure, sampled, verified),
         verdict,
         remarks);
+  }
+
+  private static boolean isFarBelow(double value, double certifiedLower) {
+    return value < certifiedLower - 1e-6 * (1 + Math.abs(certifiedLower));
   }
 
   private Devices.Candidate search(List<double[]> starts) {
