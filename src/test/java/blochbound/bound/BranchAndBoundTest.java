@@ -24,72 +24,6 @@ import org.junit.jupiter.params.provider.MethodSource;
 import org.junit.jupiter.params.provider.ValueSource;
 
 class BranchAndBoundTest {
-  private static Interval n(double value) {
-    return Interval.of(value);
-  }
-
-  private static Interval camel(Interval[] x) {
-    Interval x2 = x[0].square();
-    Interval y2 = x[1].square();
-    Interval third = Interval.ONE.dividedBy(n(3));
-    Interval first = n(4).minus(n(2.1).times(x2)).plus(x2.square().times(third)).times(x2);
-    return first.plus(x[0].times(x[1])).plus(n(4).times(y2.minus(Interval.ONE)).times(y2));
-  }
-
-  private static Interval branin(Interval[] x) {
-    Interval pi = Interval.PI;
-    Interval b = n(5.1).dividedBy(n(4).times(pi.square()));
-    Interval c = n(5).dividedBy(pi);
-    Interval inner = x[1].minus(b.times(x[0].square())).plus(c.times(x[0])).minus(n(6));
-    Interval scale = Interval.ONE.minus(Interval.ONE.dividedBy(n(8).times(pi)));
-    return inner.square().plus(n(10).times(scale).times(x[0].cos())).plus(n(10));
-  }
-
-  private static Interval goldsteinPrice(Interval[] x) {
-    Interval a = x[0].plus(x[1]).plus(Interval.ONE).square();
-    Interval b = n(2).times(x[0]).minus(n(3).times(x[1])).square();
-    Interval xx = x[0].square();
-    Interval yy = x[1].square();
-    Interval xy = x[0].times(x[1]);
-    Interval p =
-        n(19)
-            .minus(n(14).times(x[0]))
-            .plus(n(3).times(xx))
-            .minus(n(14).times(x[1]))
-            .plus(n(6).times(xy))
-            .plus(n(3).times(yy));
-    Interval q =
-        n(18)
-            .minus(n(32).times(x[0]))
-            .plus(n(12).times(xx))
-            .plus(n(48).times(x[1]))
-            .minus(n(36).times(xy))
-            .plus(n(27).times(yy));
-    return Interval.ONE.plus(a.times(p)).times(n(30).plus(b.times(q)));
-  }
-
-  private static Interval mcCormick(Interval[] x) {
-    return x[0].plus(x[1])
-        .sin()
-        .plus(x[0].minus(x[1]).square())
-        .minus(n(1.5).times(x[0]))
-        .plus(n(2.5).times(x[1]))
-        .plus(Interval.ONE);
-  }
-
-  private static Interval styblinskiTang(Interval[] x) {
-    Interval sum = Interval.ZERO;
-    for (Interval y : x) {
-      sum = sum.plus(y.square().square()).minus(n(16).times(y.square())).plus(n(5).times(y));
-    }
-    return sum.times(n(0.5));
-  }
-
-  private static Interval rosenbrock(Interval[] x) {
-    Interval a = x[1].minus(x[0].square()).square().times(n(100));
-    return a.plus(Interval.ONE.minus(x[0]).square());
-  }
-
   /** A textbook problem with its published minimum and the gap that is to be reached. */
   private record Problem(
       String name,
@@ -127,7 +61,7 @@ class BranchAndBoundTest {
   private static Problem camelProblem() {
     return new Problem(
         "six-hump camel",
-        BranchAndBoundTest::camel,
+        TextbookFunctions::camel,
         new double[] {-3, -2},
         new double[] {3, 2},
         Norm.BOX,
@@ -142,7 +76,7 @@ class BranchAndBoundTest {
         camelProblem(),
         new Problem(
             "Branin",
-            BranchAndBoundTest::branin,
+            TextbookFunctions::branin,
             new double[] {-5, 0},
             new double[] {10, 15},
             Norm.BOX,
@@ -150,7 +84,7 @@ class BranchAndBoundTest {
             0.02),
         new Problem(
             "Goldstein-Price",
-            BranchAndBoundTest::goldsteinPrice,
+            TextbookFunctions::goldsteinPrice,
             both(-2),
             both(2),
             Norm.BOX,
@@ -158,7 +92,7 @@ class BranchAndBoundTest {
             1000),
         new Problem(
             "McCormick",
-            BranchAndBoundTest::mcCormick,
+            TextbookFunctions::mcCormick,
             new double[] {-1.5, -3},
             both(4),
             Norm.BOX,
@@ -166,7 +100,7 @@ class BranchAndBoundTest {
             0.02),
         new Problem(
             "Styblinski-Tang",
-            BranchAndBoundTest::styblinskiTang,
+            TextbookFunctions::styblinskiTang,
             both(-5),
             both(5),
             Norm.BOX,
@@ -174,7 +108,7 @@ class BranchAndBoundTest {
             2),
         new Problem(
             "Rosenbrock on the disc",
-            BranchAndBoundTest::rosenbrock,
+            TextbookFunctions::rosenbrock,
             both(-1),
             both(1),
             Norm.ELLIPSOID,
@@ -244,7 +178,7 @@ class BranchAndBoundTest {
     return x -> {
       Interval sum = Interval.ZERO;
       for (int[] e : edges) {
-        sum = sum.plus(x[e[0]].times(x[e[1]]).minus(Interval.ONE).times(n(0.5)));
+        sum = sum.plus(x[e[0]].times(x[e[1]]).minus(Interval.ONE).times(Interval.of(0.5)));
       }
       return sum;
     };
