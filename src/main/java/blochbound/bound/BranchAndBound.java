@@ -236,11 +236,14 @@ public final class BranchAndBound {
   }
 
   private double allowedGap() {
-    double loss = options.reference() - attained;
-    double relative = options.relativeGap() > 0 && loss > 0 ? options.relativeGap() * loss : 0;
-    relative = Math.max(relative, LEAST_RELATIVE * (1 + Math.abs(attained)));
-    boolean onlyRelative = options.relativeGap() > 0 && Double.isInfinite(options.gap());
-    return onlyRelative ? relative : Math.max(options.gap(), relative);
+    if (options.relativeGap() == 0) {
+      return options.gap();
+    }
+    double loss = Math.max(0, options.reference() - attained);
+    double relative =
+        Math.max(options.relativeGap() * loss, LEAST_RELATIVE * (1 + Math.abs(attained)));
+    // With both gaps given, the wider one is narrow enough.
+    return Double.isInfinite(options.gap()) ? relative : Math.max(options.gap(), relative);
   }
 
   /** Decides whether the work has ended, and why. */
