@@ -18,7 +18,7 @@ final class AffineRegionBound {
   private static final double NEGLIGIBLE = 1e-9;
 
   /** Remainders below this share of their mean count with their Frobenius norm. */
-  private static final double SMALL_SHARE = 0.1;
+  private static final double SMALL_SHARE = 0.5;
 
   private final DualKernel kernel;
   private final MultiIndexTable table;

@@ -14,6 +14,9 @@ import blochbound.interval.Rounding;
  * 3.6).
  */
 public final class SpectralNorm {
+  /** Covers the few roundings of one line below, each at most one unit roundoff. */
+  private static final double UP = 1 + 16 * Rounding.UNIT;
+
   private SpectralNorm() {}
 
   /** Number of doubles that {@link #upperBound(double[], double[], int, double[])} needs. */
@@ -61,54 +64,67 @@ public final class SpectralNorm {
 
   private static double scaledBound(int n, double[] scratch) {
     int square = n * n;
-    double norm0 = frobeniusUp(scratch, 0, square);
-    square(scratch, 0, 2 * square, n);
-    double norm1 = frobeniusUp(scratch, 2 * square, square);
-    square(scratch, 2 * square, 0, n);
-    double norm2 = frobeniusUp(scratch, 0, square);
-    square(scratch, 0, 2 * square, n);
-    double bound = frobeniusUp(scratch, 2 * square, square);
-    bound = rootUp(bound, norm2, n);
-    bound = rootUp(bound, norm1, n);
-    bound = rootUp(bound, norm0, n);
-    return Math.min(bound, norm0);
-  }
-
-  /** Bound of |T| from one of |fl(T^2)| and from the Frobenius norm of T. */
-  private static double rootUp(double squareNorm, double frobenius, int n) {
-    // Each part of an entry of T^2 takes n + 1 roundings; the modulus at most sqrt(2) as much.
-    double rounding =
-        Rounding.timesUp(Rounding.gamma(2L * n + 2), Rounding.timesUp(frobenius, frobenius));
+    // |T_k|_F^2 is at most s_k * growth: its sum has fewer than 2 n^2 roundings.
+    double growth = 1 + 2 * Rounding.gamma(2L * square + 8);
+    double s0 = squares(scratch, 2 * square);
+    double s1 = square(scratch, 0, 2 * square, n);
+    double s2 = square(scratch, 2 * square, 0, n);
+    double s3 = square(scratch, 0, 2 * square, n);
+    // |T_k|^2 <= |T_{k+1}| + gamma |T_k|_F^2 + underflow: each part of an entry of T_{k+1} takes
+    // n + 1 roundings, the modulus at most sqrt(2) as much.
+    double gamma = Rounding.gamma(2L * n + 2) * growth;
     double underflow = 4.0 * n * n * n * Rounding.TINY;
-    return Rounding.sqrtUp(Rounding.addUp(squareNorm, Rounding.addUp(rounding, underflow)));
+    double bound = Math.sqrt(s3 * growth) * UP;
+    bound = Math.sqrt(bound + gamma * s2 + underflow) * UP;
+    bound = Math.sqrt(bound + gamma * s1 + underflow) * UP;
+    bound = Math.sqrt(bound + gamma * s0 + underflow) * UP;
+    return Math.min(bound, Math.sqrt(s0 * growth) * UP);
   }
 
-  private static double frobeniusUp(double[] entries, int offset, int square) {
-    return Rounding.normUp(entries, offset, 2 * square);
+  private static double squares(double[] data, int length) {
+    double sum = 0;
+    for (int k = 0; k < length; k++) {
+      sum += data[k] * data[k];
+    }
+    return sum;
   }
 
-  /** Writes the square of the Hermitian matrix at one offset to another offset. */
-  private static void square(double[] data, int from, int to, int n) {
+  /**
+   * Writes the square of the Hermitian matrix at one offset to another offset and returns the sum
+   * of its squared entries.
+   */
+  private static double square(double[] data, int from, int to, int n) {
     int half = n * n;
+    double sum = 0;
     for (int i = 0; i < n; i++) {
+      int a = from + i * n;
       for (int j = i; j < n; j++) {
-        double sumRe = 0;
-        double sumIm = 0;
+        int b = from + j * n;
+        double re = 0;
+        double im = 0;
         // (T^2)_ij = sum_k T_ik conj(T_jk) for Hermitian T.
         for (int k = 0; k < n; k++) {
-          double aRe = data[from + i * n + k];
-          double aIm = data[from + half + i * n + k];
-          double bRe = data[from + j * n + k];
-          double bIm = data[from + half + j * n + k];
-          sumRe += aRe * bRe + aIm * bIm;
-          sumIm += aIm * bRe - aRe * bIm;
+          double aRe = data[a + k];
+          double aIm = data[a + half + k];
+          double bRe = data[b + k];
+          double bIm = data[b + half + k];
+          re += aRe * bRe + aIm * bIm;
+          im += aIm * bRe - aRe * bIm;
         }
-        data[to + i * n + j] = sumRe;
-        data[to + j * n + i] = sumRe;
-        data[to + half + i * n + j] = i == j ? 0 : sumIm;
-        data[to + half + j * n + i] = i == j ? 0 : -sumIm;
+        if (i == j) {
+          data[to + i * n + i] = re;
+          data[to + half + i * n + i] = 0;
+          sum += re * re;
+        } else {
+          data[to + i * n + j] = re;
+          data[to + j * n + i] = re;
+          data[to + half + i * n + j] = im;
+          data[to + half + j * n + i] = -im;
+          sum += 2 * (re * re + im * im);
+        }
       }
     }
+    return sum;
   }
 
   private static double largestEntry(double[] re, double[] im, int length) {
