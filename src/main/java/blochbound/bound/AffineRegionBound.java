@@ -234,15 +234,17 @@ final class AffineRegionBound {
   /** Bound of |tr(W rho) - value| over all stationary states of the region. */
   private double deviationUp(double[] witness, double value, Region region) {
     kernel.run(witness, table, order);
-    for (int i = 0; i < reach.length; i++) {
-      reach[i] += kernel.phi()[i + 1] * kernel.phi()[i + 1];
-    }
     double scale = norms.frobeniusUp(witness);
     double remainder = 0;
     for (int a = 0; a < kernel.reached(); a++) {
       double[] s = kernel.remainder(a);
       double frobenius = norms.frobeniusUp(s);
-      remainder += frobenius > NEGLIGIBLE * scale ? norms.spectralUp(s, frobenius) : frobenius;
+      double size = frobenius > NEGLIGIBLE * scale ? norms.spectralUp(s, frobenius) : frobenius;
+      remainder += size;
+      double move = size + (a < kernel.solved() ? Math.abs(kernel.phi()[a]) : 0);
+      for (int variable : table.factors(a)) {
+        reach[variable] += move;
+      }
     }
     double fixed =
         Rounding.inflate(
@@ -256,7 +258,7 @@ final class AffineRegionBound {
     return Rounding.timesUp(x, x);
   }
 
-  /** Squared first-order move of the state along each coordinate, from the last distance. */
+  /** How far each coordinate may move the state, from the last distance: an estimate. */
   double[] reach() {
     return reach;
   }

@@ -24,6 +24,9 @@ import java.util.Optional;
 public final class SteadyCellBound implements CellBound {
   private static final int MOST_CANDIDATES = 4;
 
+  /** Smallest ratio of two sides of a region that losses may bring about. */
+  private static final double NEEDLE = 0x1p-6;
+
   /** Share of the bracket that a new affine bound must promise to be worth its cost. */
   private static final double WORTHWHILE_MISMATCH = 0.5;
 
@@ -167,8 +170,9 @@ public final class SteadyCellBound implements CellBound {
      */
     private void shareOut(double slack) {
       double sum = java.util.Arrays.stream(distances.reach()).sum();
-      for (int j = 0; j < loss.length && sum > 0 && Double.isFinite(slack); j++) {
-        loss[j] += slack * distances.reach()[j] / sum;
+      double weight = Double.isFinite(slack) ? slack : 1;
+      for (int j = 0; j < loss.length && sum > 0; j++) {
+        loss[j] += weight * distances.reach()[j] / sum;
       }
     }
 
@@ -189,14 +193,25 @@ public final class SteadyCellBound implements CellBound {
 
     Cell cell(double[] candidate, double value) {
       int split = -1;
+      int widest = -1;
       double most = -1;
       for (int j = 0; j < loss.length; j++) {
+        if (region.halfWidth(j) == 0) {
+          continue;
+        }
         // Without a finite loss the widest side is halved.
         double gain = Double.isFinite(loss[j]) ? loss[j] : region.halfWidth(j);
-        if (region.halfWidth(j) > 0 && gain > most) {
+        if (gain > most) {
           split = j;
           most = gain;
         }
+        if (widest < 0 || region.halfWidth(j) > region.halfWidth(widest)) {
+          widest = j;
+        }
+      }
+      // Losses are estimates: no side may become a needle while another one stays wide.
+      if (split >= 0 && region.halfWidth(split) < NEEDLE * region.halfWidth(widest)) {
+        split = widest;
       }
       return new Cell(
           lower,
