@@ -305,8 +305,8 @@ class CertificationTest {
     assertEquals(1, result.remarks().size());
   }
 
-  @org.junit.jupiter.params.ParameterizedTest
-  @org.junit.jupiter.params.provider.ValueSource(
+  @ParameterizedTest
+  @ValueSource(
       strings = {
         "entropy, atLeast: 0.40",
         "fidelity(0.5*|0><0| + 0.5*|1><1|), atLeast: 0.86",
@@ -315,9 +315,8 @@ class CertificationTest {
   void aSideWithoutFirstOrderEffectIsSplitToo(String requirement) {
     int comma = requirement.lastIndexOf(',');
     RequirementResult result =
-        Certifications.only(
-            Certifications.options(),
-            "timeUnit: none",
+        only(
+            options(),
             "sites: {q: {levels: 2}}",
             "parameters:",
             "  u: {nominal: 0, tolerance: 0.1}",
